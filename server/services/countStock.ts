@@ -16,7 +16,7 @@ function balance(sums: Sums): StockJson {
     lostG: sums.lost,
     returnedG: sums.returned,
     reservedG,
-    leftG: sums.received - sums.used - sums.lost - sums.returned - reservedG,
+    leftG: Math.max(0, sums.received - sums.used - sums.lost - sums.returned - reservedG),
   };
 }
 
@@ -64,7 +64,7 @@ export async function stockOf(
 export async function takeStock(
   entry: {
     sampleId: number;
-    kind: 'reserved' | 'used' | 'lost' | 'returned';
+    kind: 'reserved' | 'lost' | 'returned';
     massG: number;
     studyId?: number;
     runId?: number;
