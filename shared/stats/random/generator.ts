@@ -4,11 +4,11 @@ export const GENERATOR = 'xoshiro128** seeded by SplitMix32';
 /** A seeded stream of random numbers. It is an argument of every function that draws. */
 export interface Random {
   /** Next 32 bits as a whole number, 0 … 2³²−1. */
-  bits(): number;
+  readonly bits: () => number;
   /** Uniform in [0, 1), 53 bits. */
-  uniform(): number;
+  readonly uniform: () => number;
   /** Uniform whole number 0 … n−1, without bias; n from 1 to 2³². */
-  below(n: number): number;
+  readonly below: (n: number) => number;
 }
 
 const TWO_32 = 4_294_967_296;
