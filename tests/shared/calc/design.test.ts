@@ -110,8 +110,8 @@ describe('settable values', () => {
       expect(coded['voltage']).toBeCloseTo(expected, 10);
     }
     expect(properties.snapLoss).not.toBeNull();
-    expect(properties.snapLoss!).toBeGreaterThan(0);
-    expect(properties.snapLoss!).toBeLessThan(0.2);
+    // steps move points outward as well as inward: the loss may be a gain
+    expect(Math.abs(properties.snapLoss!)).toBeLessThan(0.2);
   });
 
   it('are left alone without snapping', () => {
