@@ -31,6 +31,13 @@ export type ModelChoice = Pick<FitInput, 'terms' | 'transform' | 'settingsUsed'>
   readonly exclusions: readonly { readonly runId: number }[];
 };
 
+/** What is known of a study: enough to fit and to choose. */
+export interface Evidence {
+  readonly brief: BriefJson;
+  readonly envelope: EnvelopeJson;
+  readonly runs: readonly ModelledRun[];
+}
+
 /** The recorded runs that have a value of this response, in run order, as a calculation takes them. */
 export function fitRunsOf(
   brief: PlanBasis,
@@ -62,9 +69,7 @@ export function fitRunsOf(
 
 /** One response's model as /api/calc/fit takes it. Blocks are fitted when the runs have more than one. */
 export function fitRequestOf(
-  brief: BriefJson,
-  envelope: EnvelopeJson,
-  runs: readonly ModelledRun[],
+  { brief, envelope, runs }: Evidence,
   response: Pick<ResponseJson, 'key' | 'kind' | 'unit'>,
   choice: ModelChoice,
 ) {
@@ -104,16 +109,12 @@ export type ModelChoices = Readonly<Record<string, ModelChoice | undefined>>;
  * The choice of settings as /api/calc/choose takes it: modelled responses, exact ones (energy,
  * duration), and the goals of the Brief for both. Held set-points go in as fixed values.
  */
-export function chooseRequestOf(
-  brief: BriefJson,
-  envelope: EnvelopeJson,
-  runs: readonly ModelledRun[],
-  choices: ModelChoices,
-) {
+export function chooseRequestOf(evidence: Evidence, choices: ModelChoices) {
+  const { brief, envelope } = evidence;
   const modelled = brief.responses.flatMap((response) => {
     const choice = choices[response.key];
     if (!choice) return [];
-    const { factors: _factors, ...fit } = fitRequestOf(brief, envelope, runs, response, choice);
+    const { factors: _factors, ...fit } = fitRequestOf(evidence, response, choice);
     return [{ key: response.key, ...fit }];
   });
   const computed = brief.responses.flatMap(({ key, kind }) =>
