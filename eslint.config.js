@@ -90,7 +90,7 @@ export default defineConfig([
   closed('shared/schemas', ['^(?!\\.|zod)', '/(calc|policies)/']),
   closed('server', ['^@/', '^react']),
   closed('src', OUTSIDE_SRC),
-  ...['src/lib', 'src/components', 'src/charts', 'src/hooks'].map((room) =>
+  ...['src/lib', 'src/components', 'src/charts', 'src/hooks', 'src/queries', 'src/engine'].map((room) =>
     closed(room, [...OUTSIDE_SRC, ...ABOVE_FEATURES]),
   ),
   closed('src/features', [...OUTSIDE_SRC, ...ABOVE_FEATURES, '\\.\\./\\.\\./']),

@@ -1,12 +1,10 @@
-import type { FitAnswer } from '@shared/schemas/calc/fit';
 import type { FitJson } from '@shared/schemas/fit';
 import type { Fit } from '../models/Fit';
 import { byLine } from './byLine';
 
 /** A stored model. `isStale`: the runs that it was made from have changed since. */
 export function presentFit(fit: Fit, isStale: boolean): FitJson {
-  // written by keepFit and by nothing else
-  const { summary, anova } = fit.answer as unknown as FitAnswer;
+  const { summary, anova } = fit.answer;
   return {
     id: fit.id,
     studyId: fit.studyId,

@@ -59,7 +59,7 @@ endpoint(fitsRouter, {
     if (!fit) throw notFound('model');
     const evidence = await evidenceOf(study, ctx);
     const isStale = dataHash(evidence, fit.responseKey, fit) !== fit.dataHash;
-    return { ...presentFit(fit, isStale), answer: fit.answer };
+    return { ...presentFit(fit, isStale), answer: { ...fit.answer } };
   },
 });
 

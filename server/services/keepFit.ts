@@ -63,7 +63,7 @@ export async function keepFit(study: Study, input: FitInput, ctx: Context): Prom
       labId: study.labId,
       studyId: study.id,
       dataHash: contentHash({ factors: request.factors, runs: request.runs }),
-      answer: { ...answer },
+      answer,
       madeById: ctx.actor.id,
     },
     reasoned,
