@@ -107,6 +107,6 @@ export function runResults(
       treatment: sieve?.balance.treatment ?? null,
       sieving: sieve?.balance.sieving ?? null,
     },
-    shape: sieve?.shape ?? [],
+    shape: [...(sieve?.shape ?? [])],
   };
 }
