@@ -48,6 +48,30 @@ function reflect(a: DdMatrix, v: readonly Dd[], beta: Dd, at: { k: number; j: nu
     ddSet(a, i, j, ddSubtract(ddGet(a, i, j), ddMultiply(scale, v[i - k]!)));
 }
 
+/** Makes column k zero below the diagonal and carries the columns to its right along. */
+function eliminate(a: DdMatrix, k: number, norm: Dd): void {
+  const first = ddGet(a, k, k);
+  const alpha = first[0] > 0 ? ddNegate(norm) : norm;
+  const v: Dd[] = [];
+  for (let i = k; i < a.rows; i++) v.push(ddGet(a, i, k));
+  v[0] = ddSubtract(first, alpha);
+  // vᵀv/2 = norm² − first·alpha
+  const beta = ddSubtract(ddMultiply(norm, norm), ddMultiply(first, alpha));
+  for (let j = k + 1; j < a.cols; j++) reflect(a, v, beta, { k, j });
+  ddSet(a, k, k, alpha);
+  for (let i = k + 1; i < a.rows; i++) ddSet(a, i, k, DD_ZERO);
+}
+
+/** X with y as one more column. */
+function beside(x: DdMatrix, y: readonly Dd[]): DdMatrix {
+  const a = ddZeros(x.rows, x.cols + 1);
+  for (let i = 0; i < x.rows; i++) {
+    for (let j = 0; j < x.cols; j++) ddSet(a, i, j, ddGet(x, i, j));
+    ddSet(a, i, x.cols, y[i]!);
+  }
+  return a;
+}
+
 /**
  * Householder QR of an n × p matrix beside a right-hand side, in double-double, without pivoting: the
  * order of the columns is the order of the sequential sums of squares.
@@ -57,29 +81,16 @@ function reflect(a: DdMatrix, v: readonly Dd[], beta: Dd, at: { k: number; j: nu
  */
 export function ddQr(x: DdMatrix, y: readonly Dd[]): DdQr {
   const { rows: n, cols: p } = x;
-  const a = ddZeros(n, p + 1);
-  for (let i = 0; i < n; i++) {
-    for (let j = 0; j < p; j++) ddSet(a, i, j, ddGet(x, i, j));
-    ddSet(a, i, p, y[i]!);
-  }
+  const a = beside(x, y);
   let dependent = -1;
-  for (let k = 0; k < p && dependent < 0; k++) {
+  for (let k = 0; k < p; k++) {
     const whole = toNumber(columnNorm(x, k, 0));
     const norm = columnNorm(a, k, k);
-    if (toNumber(norm) <= RANK_TOLERANCE * whole || whole === 0) {
+    if (toNumber(norm) <= RANK_TOLERANCE * whole) {
       dependent = k;
       break;
     }
-    const first = ddGet(a, k, k);
-    const alpha = first[0] > 0 ? ddNegate(norm) : norm;
-    const v: Dd[] = [];
-    for (let i = k; i < n; i++) v.push(ddGet(a, i, k));
-    v[0] = ddSubtract(first, alpha);
-    // vᵀv/2 = norm² − first·alpha
-    const beta = ddSubtract(ddMultiply(norm, norm), ddMultiply(first, alpha));
-    for (let j = k + 1; j <= p; j++) reflect(a, v, beta, { k, j });
-    ddSet(a, k, k, alpha);
-    for (let i = k + 1; i < n; i++) ddSet(a, i, k, DD_ZERO);
+    eliminate(a, k, norm);
   }
   const r = ddZeros(p, p);
   for (let i = 0; i < p; i++) for (let j = i; j < p; j++) ddSet(r, i, j, ddGet(a, i, j));
