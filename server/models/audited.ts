@@ -1,5 +1,5 @@
 import type { Model, ModelStatic, Transaction } from 'sequelize';
-import type { Context } from '../context';
+import { SYSTEM_ID, type Context } from '../context';
 import { AuditEvent } from './AuditEvent';
 
 /** Never written to the trail. */
@@ -53,7 +53,7 @@ export function audited(model: ModelStatic<Model>, noun: string): void {
       await AuditEvent.create(
         {
           labId: actor.labId,
-          actorId: actor.id,
+          actorId: actor.id === SYSTEM_ID ? null : actor.id,
           actorName: actor.name,
           actorRoles: actor.roles.join(', '),
           noun,

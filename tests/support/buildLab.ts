@@ -4,7 +4,7 @@ import request, { type Test } from 'supertest';
 import { ROLES, type Role } from '@shared/schemas/account';
 import type { EnvelopeJson } from '@shared/schemas/rig';
 import type { BriefInput } from '@shared/schemas/study';
-import type { Context } from '@server/context';
+import { systemContext, type Context } from '@server/context';
 import { Customer } from '@server/models/Customer';
 import { Lab } from '@server/models/Lab';
 import { Person } from '@server/models/Person';
@@ -43,7 +43,7 @@ export interface BuiltLab {
   as(role: Role, verb: Verb, path: string, body?: object): Test;
 }
 
-async function buildPerson(lab: Lab, role: Role, customerId: number | null, ctx: object) {
+async function buildPerson(lab: Lab, role: Role, customerId: number | null, ctx: Context) {
   return Person.create(
     {
       labId: lab.id,
@@ -67,9 +67,9 @@ export async function buildLab(
   const built = await services().sequelize.transaction(async (transaction) => {
     const lab = await Lab.create(
       { name: `Test lab ${code}`, code, twoPersonRule: options.twoPersonRule ?? true },
-      { transaction, ...systemActor(0) } as object,
+      systemContext(0, transaction),
     );
-    const ctx: Context = { transaction, ...systemActor(lab.id) };
+    const ctx = systemContext(lab.id, transaction);
     const customer = await Customer.create({ labId: lab.id, name: `Customer ${code}` }, ctx);
     const people = {} as Record<Role, Person>;
     for (const role of ROLES) people[role] = await buildPerson(lab, role, customer.id, ctx);
@@ -95,20 +95,6 @@ export async function buildLab(
       if (verb === 'post') void test.set('Idempotency-Key', randomUUID());
       return body === undefined ? test : test.send(body);
     },
-  };
-}
-
-function systemActor(labId: number) {
-  return {
-    actor: {
-      id: null as unknown as number, // the factory is nobody
-      labId,
-      name: 'factory',
-      roles: [],
-      customerId: null,
-      sessionId: 0,
-    },
-    requestId: randomUUID(),
   };
 }
 

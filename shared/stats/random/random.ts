@@ -91,3 +91,10 @@ export function shuffled<T>(items: readonly T[], random: Random): T[] {
   }
   return out;
 }
+
+/** A χ² deviate with whole degrees of freedom, as a sum of squares. */
+export function chiSquareDeviate(df: number, random: Random): number {
+  let sum = 0;
+  for (let i = 0; i < df; i++) sum += random.normal() ** 2;
+  return sum;
+}
