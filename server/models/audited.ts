@@ -52,7 +52,8 @@ export function audited(model: ModelStatic<Model>, noun: string): void {
       const { actor, transaction, requestId, why } = contextOf(options, noun);
       await AuditEvent.create(
         {
-          labId: actor.labId,
+          // a new lab’s first event is its own
+          labId: noun === 'lab' ? (row.get('id') as number) : actor.labId,
           actorId: actor.id === SYSTEM_ID ? null : actor.id,
           actorName: actor.name,
           actorRoles: actor.roles.join(', '),

@@ -59,7 +59,11 @@ async function errorOf(response: Response): Promise<ApiError> {
   const body: unknown = await response.json().catch(() => null);
   const parsed = errorJsonSchema.safeParse(body);
   if (!parsed.success)
-    return new ApiError(response.status, 'unreadable', 'The server gave an answer that makes no sense here. Load the page again.');
+    return new ApiError(
+      response.status,
+      'unreadable',
+      'The server gave an answer that makes no sense here. Load the page again.',
+    );
   const { code, message, issues = [], current } = parsed.data.error;
   return new ApiError(response.status, code, message, issues, current);
 }
