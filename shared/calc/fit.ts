@@ -85,11 +85,12 @@ function covarianceOf(model: FittedModel): FitAnswer['covariance'] {
 }
 
 function transformOf({ transform, profile }: FittedModel): FitAnswer['transform'] {
-  const { kind, lower, upper, lambda } = transform;
+  const { kind, lower, upper, movedBy, lambda } = transform;
   return {
     kind,
     lower: kind === 'logit' ? lower : null,
     upper: kind === 'logit' ? upper : null,
+    movedBy,
     lambda: kind === 'boxcox' ? lambda : null,
     lambdaLow: profile?.low ?? null,
     lambdaHigh: profile?.high ?? null,

@@ -2,6 +2,7 @@ import {
   useId,
   type InputHTMLAttributes,
   type ReactNode,
+  type Ref,
   type SelectHTMLAttributes,
   type TextareaHTMLAttributes,
 } from 'react';
@@ -26,48 +27,52 @@ interface FrameProps extends FieldFrame {
   }) => ReactNode;
 }
 
+interface WordsProps {
+  readonly id: string;
+  readonly error: string | undefined;
+  readonly caution: string | undefined;
+}
+
+/** The sentence under a control: what is wrong, or what to be careful about. */
+function Words({ id, error, caution }: WordsProps) {
+  if (error !== undefined)
+    return (
+      <p id={id} className="error">
+        {error}
+      </p>
+    );
+  return caution === undefined ? null : (
+    <p id={id} className="care">
+      {caution}
+    </p>
+  );
+}
+
+function frameClass({ size = 'desk', error, caution, className }: FieldFrame): string {
+  const tone = error !== undefined ? 'bad' : caution !== undefined ? 'careful' : '';
+  return classes('field', size === 'bench' && 'bench', tone, className);
+}
+
 /** Owns label, unit, hint and message of a control, and their ARIA links. */
-function Frame({
-  label,
-  unit,
-  hint,
-  error,
-  caution,
-  size = 'desk',
-  className,
-  control,
-}: FrameProps) {
+function Frame({ control, ...frame }: FrameProps) {
+  const { label, unit = '', hint, error, caution } = frame;
   const id = useId();
-  const hintId = hint === undefined ? undefined : `${id}-hint`;
-  const wordsId = error === undefined && caution === undefined ? undefined : `${id}-words`;
-  const describedBy = [wordsId, hintId].filter(Boolean).join(' ') || undefined;
+  const hasWords = error !== undefined || caution !== undefined;
+  const describedBy = classes(hasWords && `${id}-words`, hint !== undefined && `${id}-hint`);
   return (
-    <div
-      className={classes(
-        'field',
-        size === 'bench' && 'bench',
-        error !== undefined && 'bad',
-        error === undefined && caution !== undefined && 'careful',
-        className,
-      )}
-    >
+    <div className={frameClass(frame)}>
       <label htmlFor={id}>{label}</label>
       <div className="in">
-        {control({ id, 'aria-invalid': error !== undefined, 'aria-describedby': describedBy })}
-        {unit !== undefined && unit !== '' && <span className="in-unit">{unit}</span>}
+        {control({
+          id,
+          'aria-invalid': error !== undefined,
+          'aria-describedby': describedBy || undefined,
+        })}
+        {unit !== '' && <span className="in-unit">{unit}</span>}
       </div>
-      {error !== undefined && (
-        <p id={wordsId} className="error">
-          {error}
-        </p>
-      )}
-      {error === undefined && caution !== undefined && (
-        <p id={wordsId} className="care">
-          {caution}
-        </p>
-      )}
+      <Words id={`${id}-words`} error={error} caution={caution} />
       {hint !== undefined && (
-        <p id={hintId} className="hint">
+        <p id={`${id}-hint`} className="hint">
           {hint}
         </p>
       )}
@@ -75,7 +80,10 @@ function Frame({
   );
 }
 
-type InputProps = FieldFrame & Omit<InputHTMLAttributes<HTMLInputElement>, 'size' | 'className'>;
+type InputProps = FieldFrame &
+  Omit<InputHTMLAttributes<HTMLInputElement>, 'size' | 'className'> & {
+    readonly ref?: Ref<HTMLInputElement>;
+  };
 
 /** A field for a line of text or a number. Numbers are text too: decimal commas and units are read. */
 export function Field({

@@ -9,6 +9,7 @@ export class CalculationError extends Error {
   constructor(
     readonly code: string,
     message: string,
+    readonly details: Readonly<Record<string, unknown>> = {},
   ) {
     super(message);
   }
@@ -57,7 +58,7 @@ export async function compute<N extends Name>(
       request: Request<N>,
     ) => Promise<Outcome<Answer<N>>>;
     const outcome = await Promise.race([call(request), cancelled(signal)]);
-    if (!outcome.ok) throw new CalculationError(outcome.code, outcome.message);
+    if (!outcome.ok) throw new CalculationError(outcome.code, outcome.message, outcome.details);
     return outcome.answer;
   } finally {
     if (signal.aborted || idle.length >= MAX_IDLE) running.worker.terminate();

@@ -6,15 +6,19 @@ import type { z } from 'zod';
 export class ApiError extends Error {
   override readonly name = 'ApiError';
 
+  readonly issues: readonly Issue[];
+  /** With `stale`: the record as it stands now. */
+  readonly current: unknown;
+
   constructor(
     readonly status: number,
     readonly code: string,
     message: string,
-    readonly issues: readonly Issue[] = [],
-    /** With `stale`: the record as it stands now. */
-    readonly current: unknown = undefined,
+    extra: { issues?: readonly Issue[] | undefined; current?: unknown } = {},
   ) {
     super(message);
+    this.issues = extra.issues ?? [];
+    this.current = extra.current;
   }
 }
 
@@ -64,8 +68,8 @@ async function errorOf(response: Response): Promise<ApiError> {
       'unreadable',
       'The server gave an answer that makes no sense here. Load the page again.',
     );
-  const { code, message, issues = [], current } = parsed.data.error;
-  return new ApiError(response.status, code, message, issues, current);
+  const { code, message, issues, current } = parsed.data.error;
+  return new ApiError(response.status, code, message, { issues, current });
 }
 
 let refreshing: Promise<UserJson | null> | null = null;

@@ -145,6 +145,8 @@ export interface FitAnswer {
     readonly kind: 'none' | 'log' | 'sqrt' | 'logit' | 'boxcox';
     readonly lower: number | null;
     readonly upper: number | null;
+    /** logit: runs used when the values were moved off the bounds, else 0. */
+    readonly movedBy: number;
     readonly lambda: number | null;
     readonly lambdaLow: number | null;
     readonly lambdaHigh: number | null;
