@@ -114,7 +114,12 @@ async function contentOf(
     twoPersonRule: lab.twoPersonRule,
     keptBy: fits.map(({ madeById }) => madeById),
   });
-  const choices = Object.fromEntries(fits.map((fit) => [fit.responseKey, fit]));
+  const choices = Object.fromEntries(
+    fits.map(({ responseKey, terms, transform, settingsUsed, exclusions }) => [
+      responseKey,
+      { terms, transform, settingsUsed, exclusions },
+    ]),
+  );
   const confirmIds = evidence.runs
     .filter(({ purpose }) => purpose === 'confirm')
     .map(({ id }) => id);
