@@ -27,48 +27,26 @@ import {
   numericFactors,
   type MapModel,
 } from './mapModel';
-import { SectionPanel, type SectionEnds, type SectionWay } from './SectionPanel';
+import { COLUMNS, evenly, rangeOf, residualOf, ROWS, sectionEnds } from './mapGrid';
+import { SectionPanel, type SectionWay } from './SectionPanel';
 import { SetPointPanel } from './SetPointPanel';
-
-const COLUMNS = 61;
-const ROWS = 51;
 
 interface MapBoardProps {
   readonly evidence: Evidence & { readonly runs: readonly RunJson[] };
   readonly models: readonly MapModel[];
 }
 
+interface MapBoardProps {
+  readonly evidence: Evidence & { readonly runs: readonly RunJson[] };
+  readonly models: readonly MapModel[];
+}
+
+/** Full at two spreads. */
+const residualOf = (studentized: number | null | undefined) =>
+  studentized === null || studentized === undefined ? null : studentized / 2;
+
 const evenly = (low: number, high: number, n: number) =>
   Array.from({ length: n }, (_, i) => low + ((high - low) * i) / (n - 1));
-
-function rangeOf({ brief }: Evidence, key: SetPointKey): readonly [number, number] {
-  const factor = brief.factors.find((each) => each.key === key);
-  return [factor?.low ?? 0, factor?.high ?? 1];
-}
-
-function sectionEnds(
-  way: SectionWay,
-  x: readonly [number, number],
-  y: readonly [number, number],
-  at: readonly [number, number],
-): SectionEnds {
-  if (way === 'across')
-    return [
-      [x[0], at[1]],
-      [x[1], at[1]],
-    ];
-  if (way === 'up')
-    return [
-      [at[0], y[0]],
-      [at[0], y[1]],
-    ];
-  const inset = (range: readonly [number, number], share: number) =>
-    range[0] + share * (range[1] - range[0]);
-  return [
-    [inset(x, 0.08), inset(y, 0.08)],
-    [inset(x, 0.92), inset(y, 0.96)],
-  ];
-}
 
 /** The map is the hero: one response over two set-points, with everything that limits it. */
 export function MapBoard({ evidence, models }: MapBoardProps) {
@@ -80,12 +58,11 @@ export function MapBoard({ evidence, models }: MapBoardProps) {
   const axes = mapAxes(evidence);
   const [xKey, yKey] = axes;
   const [xRange, yRange] = [rangeOf(evidence, xKey), rangeOf(evidence, yKey)];
+  const [xLow, xHigh] = xRange;
+  const [yLow, yHigh] = yRange;
   const grid = useMemo(
-    () => ({
-      x: evenly(xRange[0], xRange[1], COLUMNS),
-      y: evenly(yRange[0], yRange[1], ROWS),
-    }),
-    [xRange[0], xRange[1], yRange[0], yRange[1]],
+    () => ({ x: evenly(xLow, xHigh, COLUMNS), y: evenly(yLow, yHigh, ROWS) }),
+    [xLow, xHigh, yLow, yHigh],
   );
   const others = brief.factors.map(({ key }) => key).filter((key) => !axes.includes(key));
   const slice = useDeferredValue(setting);
@@ -160,7 +137,7 @@ export function MapBoard({ evidence, models }: MapBoardProps) {
         id: String(run.number),
         x: delivered[xKey],
         y: delivered[yKey],
-        residual: diagnosis?.studentizedInternal == null ? null : diagnosis.studentizedInternal / 2,
+        residual: residualOf(diagnosis?.studentizedInternal),
         isOnSlice: isOnSlice(evidence, axes, run, setting),
       };
     });

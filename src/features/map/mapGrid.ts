@@ -1,0 +1,44 @@
+import type { SetPointKey } from '@shared/schemas/setPoint';
+import type { Evidence } from '@shared/study/requests';
+import type { SectionEnds, SectionWay } from './SectionPanel';
+
+export const COLUMNS = 61;
+export const ROWS = 51;
+
+/** Full at two spreads. */
+export const residualOf = (studentized: number | null | undefined) =>
+  studentized === null || studentized === undefined ? null : studentized / 2;
+
+export const evenly = (low: number, high: number, n: number) =>
+  Array.from({ length: n }, (_, i) => low + ((high - low) * i) / (n - 1));
+
+/** The Brief’s range of a set-point. */
+export function rangeOf({ brief }: Evidence, key: SetPointKey): readonly [number, number] {
+  const factor = brief.factors.find((each) => each.key === key);
+  return [factor?.low ?? 0, factor?.high ?? 1];
+}
+
+/** Where A and A′ lie. */
+export function sectionEnds(
+  way: SectionWay,
+  x: readonly [number, number],
+  y: readonly [number, number],
+  at: readonly [number, number],
+): SectionEnds {
+  if (way === 'across')
+    return [
+      [x[0], at[1]],
+      [x[1], at[1]],
+    ];
+  if (way === 'up')
+    return [
+      [at[0], y[0]],
+      [at[0], y[1]],
+    ];
+  const inset = (range: readonly [number, number], share: number) =>
+    range[0] + share * (range[1] - range[0]);
+  return [
+    [inset(x, 0.08), inset(y, 0.08)],
+    [inset(x, 0.92), inset(y, 0.96)],
+  ];
+}
