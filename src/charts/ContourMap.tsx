@@ -1,7 +1,7 @@
 import { useId, useMemo, type KeyboardEvent, type MouseEvent } from 'react';
 import { areaAbove, isolines, pathOf, type Px } from './contourGeometry';
 import { drawLines } from './mapLines';
-import { Axes, LineLabel, rosette, RunRing, Section, SetPoint } from './mapParts';
+import { Axes, EdgeName, LineLabel, rosette, RunRing, Section, SetPoint } from './mapParts';
 import {
   gridOf,
   HEIGHT,
@@ -18,6 +18,11 @@ export interface ContourMapProps {
   readonly y: MapAxis;
   readonly predicted: readonly (readonly number[])[];
   readonly feasible: readonly (readonly boolean[])[];
+  /** Room left to each limit of the rig: its edge runs where this is 0, with its name along it. */
+  readonly limits: readonly {
+    readonly values: readonly (readonly number[])[];
+    readonly words: string;
+  }[];
   /** Standard deviation of the mean over that of one run: above 0.6 the map is veiled. */
   readonly spread: readonly (readonly number[])[];
   readonly runs: readonly MapRun[];
@@ -39,22 +44,32 @@ const KEYS: Readonly<Record<string, { dx: number; dy: number; dz: number }>> = {
   PageDown: { dx: 0, dy: 0, dz: -1 },
 };
 
+/** The smallest room to any limit at each point, every limit in units of its own largest. */
+function roomOf(
+  limits: ContourMapProps['limits'],
+  like: readonly (readonly number[])[],
+): number[][] {
+  const scaled = limits.map(({ values }) => {
+    const largest = Math.max(...values.flat().map(Math.abs), 1e-12);
+    return values.map((row) => row.map((value) => value / largest));
+  });
+  return like.map((row, j) =>
+    row.map((_, i) => scaled.reduce((least, each) => Math.min(least, each[j]?.[i] ?? 1), 1)),
+  );
+}
+
 /**
  * The contour map: bands and labelled isolines in one sequence, toothed goal lines, hatching where nothing
  * can be dialled in, a veil where data are few, runs as rings, the set-point as a spark. Drawn as SVG, so
  * that it prints sharp and takes the keyboard.
  */
 export function ContourMap(props: ContourMapProps) {
-  const { label, x, y, predicted, feasible, spread, runs, setPoint, section, onPick, onMove } =
-    props;
+  const { label, x, y, predicted, limits, spread, runs, setPoint, section, onPick, onMove } = props;
   const id = useId();
   const scales = useMemo(() => scalesOf(x, y), [x, y]);
   const { box, inner, px, py } = scales;
   const { lines, goals, levels } = useMemo(() => drawLines(props, scales), [props, scales]);
-  const mask = gridOf(
-    feasible.map((row) => row.map(Number)),
-    box,
-  );
+  const room = gridOf(roomOf(limits, predicted), box);
   const veil = gridOf(spread, box);
   const at = ([u, v]: readonly [number, number]): Px => [px(u), py(v)];
   const onClick = (event: MouseEvent<SVGSVGElement>) => {
@@ -97,7 +112,7 @@ export function ContourMap(props: ContourMapProps) {
           <circle cx="4.5" cy="4.5" r="0.8" fill="var(--ink-2)" />
         </pattern>
         <clipPath id={`${id}c`}>
-          <path d={areaAbove(mask, 0.5)} clipRule="evenodd" />
+          <path d={areaAbove(room, 0)} clipRule="evenodd" />
         </clipPath>
       </defs>
       <rect
@@ -163,8 +178,11 @@ export function ContourMap(props: ContourMapProps) {
           </g>
         ))}
       </g>
-      {isolines(mask, 0.5).map((line, i) => (
+      {isolines(room, 0).map((line, i) => (
         <path key={i} d={pathOf(line)} fill="none" stroke="var(--ink)" strokeWidth={1.4} />
+      ))}
+      {limits.map(({ values, words }) => (
+        <EdgeName key={words} lines={isolines(gridOf(values, box), 0)} words={words} />
       ))}
       {lines.map((line) => (
         <LineLabel key={line.key} line={line} isGoal={false} />

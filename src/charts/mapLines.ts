@@ -19,6 +19,23 @@ export interface LineInput {
   readonly goals: readonly GoalLine[];
   readonly runs: readonly MapRun[];
   readonly setPoint: { readonly x: number; readonly y: number };
+  readonly section: readonly [readonly [number, number], readonly [number, number]] | null;
+}
+
+const SECTION_DOTS = 40;
+
+/** Labels keep off the section line: dots along it stand in the way. */
+function alongSection(
+  section: LineInput['section'],
+  px: (value: number) => number,
+  py: (value: number) => number,
+): Obstacle[] {
+  if (!section) return [];
+  const [[ax, ay], [bx, by]] = section;
+  return Array.from({ length: SECTION_DOTS + 1 }, (_, i) => {
+    const share = i / SECTION_DOTS;
+    return { x: px(ax + share * (bx - ax)), y: py(ay + share * (by - ay)), radius: 2 };
+  });
 }
 
 export interface DrawnLine {
@@ -35,7 +52,7 @@ export function drawLines(
   input: LineInput,
   scales: Scales,
 ): { lines: DrawnLine[]; goals: DrawnLine[]; levels: number[] } {
-  const { predicted, feasible, goals, runs, setPoint } = input;
+  const { predicted, feasible, goals, runs, setPoint, section } = input;
   const { box, px, py } = scales;
   const shown = predicted.flatMap((row, j) => row.filter((_, i) => feasible[j]?.[i] === true));
   const values = shown.length > 0 ? shown : predicted.flat();
@@ -45,6 +62,7 @@ export function drawLines(
   const obstacles: Obstacle[] = [
     ...runs.map(({ x, y, isOnSlice }) => ({ x: px(x), y: py(y), radius: isOnSlice ? 12 : 4 })),
     { x: px(setPoint.x), y: py(setPoint.y), radius: 22 },
+    ...alongSection(section, px, py),
   ];
   const draw = (
     line: Px[],

@@ -1,6 +1,6 @@
 import { useId } from 'react';
 import { formatPlain } from '@/lib/format';
-import { pathOf, type Px } from './contourGeometry';
+import { lengths, pathOf, pointAt, type Px } from './contourGeometry';
 import type { DrawnLine } from './mapLines';
 import { HEIGHT, ticks, type MapAxis, type MapRun, type Scales } from './mapScales';
 
@@ -188,5 +188,38 @@ export function SetPoint({ at: [x, y] }: { readonly at: Px }) {
         strokeWidth={1.6}
       />
     </g>
+  );
+}
+
+interface EdgeNameProps {
+  readonly lines: readonly (readonly Px[])[];
+  readonly words: string;
+}
+
+const LEAST_LENGTH = 110;
+
+/** The name of a limit along its edge. */
+export function EdgeName({ lines, words }: EdgeNameProps) {
+  const line = [...lines].sort((a, b) => b.length - a.length)[0];
+  if (!line) return null;
+  const sums = lengths(line);
+  const whole = sums.at(-1) ?? 0;
+  if (whole < LEAST_LENGTH) return null;
+  const [a, middle, b] = [0.45, 0.5, 0.55].map((share) => pointAt(line, sums, share * whole)) as [
+    Px,
+    Px,
+    Px,
+  ];
+  const angle = (Math.atan2(b[1] - a[1], b[0] - a[0]) * 180) / Math.PI;
+  const upright = angle > 90 ? angle - 180 : angle < -90 ? angle + 180 : angle;
+  return (
+    <text
+      transform={`translate(${middle[0].toFixed(1)} ${middle[1].toFixed(1)}) rotate(${upright.toFixed(1)})`}
+      textAnchor="middle"
+      dy={words.startsWith('misfires') ? 18 : -9}
+      className="map-edge"
+    >
+      {words}
+    </text>
   );
 }

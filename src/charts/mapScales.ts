@@ -25,7 +25,7 @@ export interface GoalLine {
 }
 
 export const WIDTH = 720;
-export const HEIGHT = 560;
+export const HEIGHT = 500;
 const MARGIN = { left: 50, right: 14, top: 12, bottom: 42 };
 const PAD = 0.03;
 

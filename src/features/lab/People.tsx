@@ -17,6 +17,7 @@ import { Panel } from '@/components/Panel';
 import { newKey } from '@/lib/api';
 import { formatMoment } from '@/lib/format';
 import { showIssues } from '@/lib/formErrors';
+import { optionalId } from '@/lib/optionalId';
 import { useChangePerson, useInviteAgain, useInvitePerson } from '@/queries/lab';
 
 interface Invitation {
@@ -84,7 +85,7 @@ function InviteForm({ customers, onInvited }: InviteFormProps) {
             ]}
             error={errors.customerId?.message}
             {...register('customerId', {
-              setValueAs: (value: string) => (value === '' ? null : Number(value)),
+              setValueAs: optionalId,
             })}
           />
         )}

@@ -1,24 +1,23 @@
 import { fitRequestSchema } from '@shared/schemas/calc/fit';
 import type { RunJson } from '@shared/schemas/run';
-import { setPointOf, type SettingJson, type SetPointKey } from '@shared/schemas/setPoint';
+import type { SettingJson, SetPointKey } from '@shared/schemas/setPoint';
 import { snap } from '@shared/stats/coding/snap';
 import { constraintsOf, variedSettings } from '@shared/study/plan';
 import { chooseRequestOf, fitRequestOf, type Evidence } from '@shared/study/requests';
 import { deliveredSetting } from '@shared/study/results';
 import { useQueries, useQuery } from '@tanstack/react-query';
-import { useDeferredValue, useMemo, useState } from 'react';
+import { useDeferredValue, useState } from 'react';
 import { ContourMap } from '@/charts/ContourMap';
 import { ChartFrame } from '@/charts/Chart';
-import type { GoalLine, MapRun } from '@/charts/mapScales';
+import type { MapRun } from '@/charts/mapScales';
 import { Notice } from '@/components/Notice';
 import { Panel } from '@/components/Panel';
 import { Segments } from '@/components/Segments';
 import { LoadingState } from '@/components/states';
 import { calculation } from '@/engine/engine';
-import { formatNumber, formatPlain, withUnit } from '@/lib/format';
+import { formatNumber } from '@/lib/format';
 import {
   axisWords,
-  computedAt,
   dialOf,
   isOnSlice,
   limitsOf,
@@ -27,7 +26,17 @@ import {
   numericFactors,
   type MapModel,
 } from './mapModel';
-import { COLUMNS, evenly, rangeOf, residualOf, ROWS, sectionEnds } from './mapGrid';
+import {
+  COLUMNS,
+  evenly,
+  heldWords,
+  limitName,
+  rangeOf,
+  residualOf,
+  ROWS,
+  sectionEnds,
+} from './mapGrid';
+import { exactGoals, modelledGoals } from './goalLines';
 import { SectionPanel, type SectionWay } from './SectionPanel';
 import { SetPointPanel } from './SetPointPanel';
 
@@ -41,13 +50,6 @@ interface MapBoardProps {
   readonly models: readonly MapModel[];
 }
 
-/** Full at two spreads. */
-const residualOf = (studentized: number | null | undefined) =>
-  studentized === null || studentized === undefined ? null : studentized / 2;
-
-const evenly = (low: number, high: number, n: number) =>
-  Array.from({ length: n }, (_, i) => low + ((high - low) * i) / (n - 1));
-
 /** The map is the hero: one response over two set-points, with everything that limits it. */
 export function MapBoard({ evidence, models }: MapBoardProps) {
   const { brief, envelope, runs } = evidence;
@@ -60,10 +62,7 @@ export function MapBoard({ evidence, models }: MapBoardProps) {
   const [xRange, yRange] = [rangeOf(evidence, xKey), rangeOf(evidence, yKey)];
   const [xLow, xHigh] = xRange;
   const [yLow, yHigh] = yRange;
-  const grid = useMemo(
-    () => ({ x: evenly(xLow, xHigh, COLUMNS), y: evenly(yLow, yHigh, ROWS) }),
-    [xLow, xHigh, yLow, yHigh],
-  );
+  const grid = { x: evenly(xLow, xHigh, COLUMNS), y: evenly(yLow, yHigh, ROWS) };
   const others = brief.factors.map(({ key }) => key).filter((key) => !axes.includes(key));
   const slice = useDeferredValue(setting);
   const surfaces = useQueries({
@@ -97,32 +96,14 @@ export function MapBoard({ evidence, models }: MapBoardProps) {
   const surface = surfaces[at]?.data;
   const failure = surfaces.find(({ error }) => error)?.error;
 
-  const goals = useMemo((): GoalLine[] => {
-    const modelled = models.flatMap(({ response }, i) => {
-      const values = surfaces[i]?.data?.predicted;
-      return values
-        ? limitsOf(response).map(({ value, holdsAbove }) => ({
-            words: `${response.key === shown ? '' : `${response.name} `}${withUnit(formatPlain(value), response.unit)}`,
-            values,
-            level: value,
-            holdsAbove,
-          }))
-        : [];
-    });
-    const exact = brief.responses.flatMap((response) => {
-      if (computedAt(evidence, response, slice) === null) return [];
-      const values = grid.y.map((v) =>
-        grid.x.map((u) => computedAt(evidence, response, { ...slice, [xKey]: u, [yKey]: v }) ?? 0),
-      );
-      return limitsOf(response).map(({ value, holdsAbove }) => ({
-        words: withUnit(formatPlain(value), response.unit),
-        values,
-        level: value,
-        holdsAbove,
-      }));
-    });
-    return [...modelled, ...exact];
-  }, [models, surfaces, brief.responses, evidence, slice, grid, xKey, yKey, shown]);
+  const goals = [
+    ...modelledGoals(
+      models,
+      surfaces.map(({ data }) => data?.predicted ?? null),
+      shown,
+    ),
+    ...exactGoals(evidence, axes, grid, slice),
+  ];
 
   if (!model) return null;
   const { response, answer } = model;
@@ -170,9 +151,8 @@ export function MapBoard({ evidence, models }: MapBoardProps) {
     }),
   );
   const ends = sectionEnds(way, xRange, yRange, [setting[xKey], setting[yKey]]);
-  const held = others.map(
-    (key) => `${setPointOf(key).name} ${withUnit(formatPlain(setting[key]), setPointOf(key).unit)}`,
-  );
+  const held = others.map(heldWords(setting));
+  const limitWords = constraintsOf(brief, envelope).map(limitName(envelope));
   const rows = grid.y.flatMap((v, j) =>
     j % 10 === 0
       ? grid.x.flatMap((u, i) =>
@@ -260,6 +240,10 @@ export function MapBoard({ evidence, models }: MapBoardProps) {
                   y={{ ...axisWords(yKey), values: grid.y }}
                   predicted={surface.predicted}
                   feasible={surface.feasible}
+                  limits={surface.slack.map((values, i) => ({
+                    values,
+                    words: limitWords[i] ?? '',
+                  }))}
                   spread={surface.spread}
                   runs={mapRuns}
                   goals={goals}
