@@ -3,12 +3,12 @@ import { inRunOrder } from '../stats/design/arrange';
 import { informationOf } from '../stats/design/designMatrix';
 import { aliasChains, placesOf, resolutionOf, type EffectWord } from '../stats/design/effectWord';
 import { outsidePoints, refuseOutside, settle, type Settled } from '../stats/design/settle';
-import { cholesky, logDeterminant } from '../stats/linalg/cholesky';
+import { cholesky, lnDeterminant } from '../stats/linalg/cholesky';
 import { modelMatrix, type Point } from '../stats/model/modelMatrix';
-import { termsOf } from '../stats/model/term';
-import { GENERATOR, makeRandom } from '../stats/random/generator';
-import { designRequestSchema, type DesignAnswer, type DesignRequest } from '../schemas/calc/design';
-import { buildDesign, modelFor, type BuiltDesign, type ParsedDesign } from './designPoints';
+import { termsOf, type Term } from '../stats/model/term';
+import { seeded } from '../stats/random/random';
+import type { DesignAnswer, DesignRequest } from '../schemas/calc/design';
+import { buildDesign, modelFor, type BuiltDesign } from './designPoints';
 import { checkRunCount } from './designKinds';
 import { evaluateAnswer } from './evaluate';
 import { checkFactorCount } from './limits';
@@ -16,7 +16,7 @@ import { checkFactorCount } from './limits';
 const OPTIMAL = 'an optimal design, which stays inside the limits';
 
 /** Whether a variant of the design could be run everywhere. */
-function fits(request: ParsedDesign): boolean {
+function fits(request: DesignRequest): boolean {
   try {
     const settled = settledPoints(request, buildDesign(request));
     return outsidePoints(request.factors, request.constraints, settled).length === 0;
@@ -27,7 +27,7 @@ function fits(request: ParsedDesign): boolean {
 }
 
 /** What to take instead of a design that leaves the envelope, only what would itself stay inside. */
-function alternativesTo(request: ParsedDesign): string[] {
+function alternativesTo(request: DesignRequest): string[] {
   if (request.kind !== 'centralComposite') return [OPTIMAL];
   const { options } = request;
   const inscribed = fits({ ...request, options: { ...options, inscribed: true } });
@@ -42,32 +42,39 @@ function alternativesTo(request: ParsedDesign): string[] {
   ];
 }
 
-function settledPoints({ factors, snap }: ParsedDesign, { points }: BuiltDesign): Settled[] {
+function settledPoints({ factors, snap }: DesignRequest, { points }: BuiltDesign): Settled[] {
   // runs that stay were made as they are
   return points.map(({ point, pointType }) =>
     settle(factors, point, snap && pointType !== 'included'),
   );
 }
 
-function logDetOf(request: ParsedDesign, points: readonly Point[]): number | null {
-  const x = modelMatrix(request.factors, termsOf(request.factors, modelFor(request)), points);
+function logDetOf(
+  { factors }: DesignRequest,
+  terms: readonly Term[],
+  points: readonly Point[],
+): number | null {
+  const x = modelMatrix(factors, terms, points);
   const l = cholesky(informationOf(x), x.cols);
-  return l ? logDeterminant(l, x.cols) / x.cols : null;
+  return l ? lnDeterminant(l, x.cols) / x.cols : null;
 }
 
 /** Share of |M|^(1/p) that snapping costs. */
 function snapLossOf(
-  request: ParsedDesign,
+  request: DesignRequest,
   built: BuiltDesign,
   settled: readonly Settled[],
 ): number | null {
-  if (!request.snap) return 0;
+  if (!request.snap) return null;
+  const terms = termsOf(request.factors, modelFor(request, built));
   const wished = logDetOf(
     request,
+    terms,
     built.points.map(({ point }) => point),
   );
   const got = logDetOf(
     request,
+    terms,
     settled.map(({ point }) => point),
   );
   if (wished === null || got === null) return null;
@@ -82,34 +89,53 @@ function effectName(keys: readonly string[], { mask, sign }: EffectWord): string
   return sign < 0 ? `-${name}` : name;
 }
 
-function notesOf(request: ParsedDesign, settled: readonly Settled[]): string[] {
-  const collapsed = request.factors.filter(
+/** Points that snapping made equal, and factors that it left without a change. */
+function warningsOf(
+  { factors, snap }: DesignRequest,
+  built: BuiltDesign,
+  settled: readonly Settled[],
+): DesignAnswer['warnings'] {
+  if (!snap) return [];
+  const distinct = (points: readonly Point[]) => new Set(points.map((each) => each.join())).size;
+  const lost =
+    distinct(built.points.map(({ point }) => point)) - distinct(settled.map(({ point }) => point));
+  const still = factors.filter(
     ({ key }) => new Set(settled.map(({ settings }) => settings[key])).size < 2,
   );
-  return collapsed.map(
-    ({ key }) => `All runs have one setting of ${key}: its steps are too wide for its range.`,
-  );
+  const warnings = still.map(({ key }) => ({
+    code: 'steps-too-coarse',
+    message: `All runs have one setting of ${key}: its steps are too wide for its range.`,
+  }));
+  if (lost > 0)
+    warnings.unshift({
+      code: 'steps-too-coarse',
+      message: `Snapping to the steps made ${lost} point${lost > 1 ? 's' : ''} fall on another one: the ranges are narrow for these steps.`,
+    });
+  return warnings;
 }
 
 function propertiesOf(
-  request: ParsedDesign,
+  request: DesignRequest,
   built: BuiltDesign,
   settled: readonly Settled[],
 ): DesignAnswer['properties'] {
   const keys = request.factors.map(({ key }) => key);
-  const relation = built.relation ?? [];
+  const { alpha, generators, relation, confounded } = built;
+  const resolution = resolutionOf(relation ?? []);
   return {
-    alpha: built.alpha ?? null,
-    resolution: resolutionOf(relation),
-    generators: [...(built.generators ?? [])],
-    definingRelation: relation.map(({ mask }) => placesOf(mask, keys.length).map((i) => keys[i]!)),
-    aliases: aliasChains(relation, keys.length).map((chain) =>
-      chain.map((effect) => effectName(keys, effect)),
-    ),
-    confounded: (built.confounded ?? []).map((effect) => effectName(keys, effect)),
+    ...(alpha === undefined ? {} : { alpha }),
+    ...(resolution === null ? {} : { resolution }),
+    ...(generators && { generators }),
+    ...(relation && {
+      definingRelation: relation.map(({ mask }) =>
+        placesOf(mask, keys.length).map((i) => keys[i]!),
+      ),
+      aliases: aliasChains(relation, keys.length).map((chain) =>
+        chain.map((effect) => effectName(keys, effect)),
+      ),
+    }),
+    ...(confounded && { confounded: confounded.map((effect) => effectName(keys, effect)) }),
     snapLoss: snapLossOf(request, built, settled),
-    random: GENERATOR,
-    notes: notesOf(request, settled),
   };
 }
 
@@ -121,8 +147,7 @@ function propertiesOf(
  *   what to take instead; `too-many-factors`, `too-few-runs`, `not-available`, `aliased`,
  *   `no-feasible-point`, `unknown-term`, `out-of-bounds`.
  */
-export function designAnswer(input: DesignRequest): DesignAnswer {
-  const request = designRequestSchema.parse(input);
+export function designAnswer(request: DesignRequest): DesignAnswer {
   const { factors, constraints, region, seed, randomise } = request;
   checkFactorCount(factors);
   const built = buildDesign(request);
@@ -138,16 +163,23 @@ export function designAnswer(input: DesignRequest): DesignAnswer {
     coded: settled[i]!.coded,
     settings: settled[i]!.settings,
   }));
-  const runs = inRunOrder(placed, randomise ? makeRandom(seed) : null).map((run, i) => ({
+  const runs = inRunOrder(placed, randomise ? seeded(seed, 'run order') : null).map((run, i) => ({
     runOrder: i + 1,
     ...run,
   }));
-  const evaluation = evaluateAnswer({
+  const asked = {
     factors,
     constraints,
     region,
     runs: runs.map(({ settings, block }) => ({ settings, block })),
-    model: modelFor(request),
-  });
-  return { runs, properties: propertiesOf(request, built, settled), evaluation };
+    model: modelFor(request, built),
+    significance: 0.05,
+  };
+  const evaluation = evaluateAnswer(asked, built.dBound);
+  return {
+    runs,
+    properties: propertiesOf(request, built, settled),
+    evaluation,
+    warnings: warningsOf(request, built, settled),
+  };
 }

@@ -1,66 +1,86 @@
-import type { z } from 'zod';
 import { StatsError } from '../stats/errors';
-import { approximateDesign } from '../stats/design/approximateDesign';
+import { isCategorical } from '../stats/coding/factor';
+import { bestOn, boundFrom } from '../stats/design/criteria';
+import { modelOf } from '../stats/design/designMatrix';
 import { arrange, centreOf, type OrderedPoint } from '../stats/design/arrange';
 import type { CodedDesign, CodedPoint } from '../stats/design/codedDesign';
 import { optimalDesign, type Placed } from '../stats/design/optimalDesign';
-import { makeRegion } from '../stats/design/region';
+import { makeRegion } from '../stats/design/designRegion';
 import { regionMoments } from '../stats/design/regionMoments';
+import { resolutionOf } from '../stats/design/effectWord';
 import { settableLattice } from '../stats/design/settableLattice';
 import { shareOut } from '../stats/design/shareOut';
 import { spaceFilling } from '../stats/design/spaceFilling';
 import { compileRow } from '../stats/model/compileRow';
 import { pointOf } from '../stats/model/modelMatrix';
-import { termsOf } from '../stats/model/term';
-import { makeRandom } from '../stats/random/generator';
-import type { DesignKind, designRequestSchema } from '../schemas/calc/design';
+import { termsOf, type Term } from '../stats/model/term';
+import { seeded } from '../stats/random/random';
+import type { DesignKind, DesignRequest } from '../schemas/calc/design';
 import type { ModelInput } from '../schemas/calc/common';
 import { STRUCTURED, type StructuredKind } from './designKinds';
-
-export type ParsedDesign = z.output<typeof designRequestSchema>;
 
 /** Every kind has the model that it is made for. */
 const MODELS: Readonly<Record<DesignKind, ModelInput>> = {
   factorial: 'interaction',
-  fractional: 'interaction',
+  fractional: 'linear',
   threeLevel: 'quadratic',
   plackettBurman: 'linear',
   centralComposite: 'quadratic',
   boxBehnken: 'quadratic',
-  definitiveScreening: 'quadratic',
+  definitiveScreening: 'linear',
   optimal: 'quadratic',
   spaceFilling: 'quadratic',
 };
+/** From here up a fraction tells two-factor products apart. */
+const CLEAR_PRODUCTS = 5;
 
-const CENTRE_POINTS: Readonly<Partial<Record<DesignKind, number>>> = {
-  threeLevel: 0,
-  definitiveScreening: 1,
-  optimal: 0,
-  spaceFilling: 0,
-};
+const WITH_CENTRE: readonly DesignKind[] = [
+  'factorial',
+  'fractional',
+  'centralComposite',
+  'boxBehnken',
+];
 const USUAL_CENTRE_POINTS = 6;
+const EXTRA_OPTIMAL_RUNS = 5;
+const DEFAULT_SPACE_RUNS = 12;
 
-export function modelFor({ kind, options }: ParsedDesign): ModelInput {
-  return options.model ?? MODELS[kind];
+/** The model that a design is evaluated for: the one asked for, or the largest that its kind is meant for. */
+export function modelFor(
+  { kind, options }: DesignRequest,
+  built: Pick<BuiltDesign, 'relation'>,
+): ModelInput {
+  if (options.model !== undefined) return options.model;
+  const resolution = resolutionOf(built.relation ?? []);
+  const isClear = resolution === null || resolution >= CLEAR_PRODUCTS;
+  return kind === 'fractional' && isClear ? 'interaction' : MODELS[kind];
+}
+
+/** Centre points asked for, or what the kind usually takes. */
+function centreCount({ kind, centrePoints, factors }: DesignRequest): number {
+  if (centrePoints !== undefined) return centrePoints;
+  if (kind === 'definitiveScreening') return 1;
+  return WITH_CENTRE.includes(kind) && !factors.some(isCategorical) ? USUAL_CENTRE_POINTS : 0;
 }
 
 /** A design with its points in standard order. */
 export interface BuiltDesign extends Omit<CodedDesign, 'points'> {
   readonly points: readonly OrderedPoint[];
+  /** Upper bound on |M|^(1/p), when the search for the design gave it. */
+  readonly dBound?: number;
 }
 
 /** How many blocks one replicate has, when replicates may be blocks of their own. */
-function innerBlocks({ kind, blocks, replicates }: ParsedDesign) {
+function innerBlocks({ kind, blocks, replicates }: DesignRequest) {
   const whole = { blocks, replicatesAreBlocks: false };
   if (blocks === 1 || replicates === 1 || kind === 'centralComposite') return whole;
   if (blocks % replicates !== 0) return whole;
   return { blocks: blocks / replicates, replicatesAreBlocks: true };
 }
 
-function structured(request: ParsedDesign, kind: StructuredKind): BuiltDesign {
+function structured(request: DesignRequest, kind: StructuredKind): BuiltDesign {
   const { factors, options, replicates } = request;
   const { blocks, replicatesAreBlocks } = innerBlocks(request);
-  const asked = request.centrePoints ?? CENTRE_POINTS[kind] ?? USUAL_CENTRE_POINTS;
+  const asked = centreCount(request);
   const design = STRUCTURED[kind]({ factors, options, blocks, centrePoints: asked, replicates });
   // a three-level factorial brings its own centre
   const own = replicates * design.points.filter(({ pointType }) => pointType === 'centre').length;
@@ -71,40 +91,35 @@ function structured(request: ParsedDesign, kind: StructuredKind): BuiltDesign {
   };
 }
 
-function runsAsked({ kind, options }: ParsedDesign): number {
-  if (options.runs !== undefined) return options.runs;
-  throw new StatsError(
-    'too-few-runs',
-    `Say how many runs the ${kind === 'optimal' ? 'optimal' : 'space-filling'} design has (options.runs).`,
-  );
-}
-
 const numbered = (points: readonly CodedPoint[]): OrderedPoint[] =>
   points.map((each, i) => ({ ...each, standardOrder: i + 1 }));
 
-function filling(request: ParsedDesign): BuiltDesign {
+function filling(request: DesignRequest): BuiltDesign {
   const { factors, constraints, region, blocks, seed } = request;
   if (blocks > 1)
     throw new StatsError(
       'not-available',
       'A space-filling design is not parted into blocks. Take an optimal design.',
     );
-  const centre = request.centrePoints ?? 0;
   const lattice = settableLattice(makeRegion(factors, constraints, region));
-  const design = spaceFilling(lattice, runsAsked(request) - centre, makeRandom(seed));
+  const design = spaceFilling(
+    lattice,
+    request.options.runs ?? DEFAULT_SPACE_RUNS,
+    seeded(seed, 'design'),
+  );
   const arrangement = {
     factors,
     replicates: request.replicates,
     replicatesAreBlocks: false,
-    centrePoints: centre,
+    centrePoints: centreCount(request),
   };
   return { ...design, points: arrange(design, arrangement) };
 }
 
 /** Runs that stay: included ones, then centre points, each in its block. */
-function keptPoints(request: ParsedDesign, sizes: readonly number[]): CodedPoint[] {
+function keptPoints(request: DesignRequest): CodedPoint[] {
   const { factors, options, blocks } = request;
-  const included = (options.include ?? []).map(({ settings, block = 1 }): CodedPoint => {
+  const included = (options.include ?? []).map(({ settings, block }): CodedPoint => {
     if (block > blocks)
       throw new StatsError(
         'shape',
@@ -112,7 +127,7 @@ function keptPoints(request: ParsedDesign, sizes: readonly number[]): CodedPoint
       );
     return { point: pointOf(factors, settings), block, pointType: 'included' };
   });
-  const centre = shareOut(request.centrePoints ?? 0, sizes.length).flatMap((count, i) =>
+  const centre = shareOut(centreCount(request), blocks).flatMap((count, i) =>
     Array.from({ length: count }, (_, turn): CodedPoint => ({
       point: centreOf(factors, turn),
       block: i + 1,
@@ -130,15 +145,38 @@ function freeBlocks(sizes: readonly number[], kept: readonly CodedPoint[]): numb
   });
 }
 
-function optimal(request: ParsedDesign): BuiltDesign {
+/** @throws StatsError `aliased` when the runs found leave terms that cannot be told apart. */
+function refuseAliased(
+  { factors }: DesignRequest,
+  terms: readonly Term[],
+  runs: readonly CodedPoint[],
+): void {
+  const points = runs.map(({ point }) => point);
+  const blocks = runs.map(({ block }) => block);
+  const { names, split } = modelOf(factors, terms, points, blocks);
+  const lost = names.filter((_, j) => !split.estimable[j]);
+  if (lost.length > 0) throw aliased(lost);
+}
+
+function aliased(names: readonly string[]): StatsError {
+  return new StatsError(
+    'aliased',
+    `No settable runs inside the limits tell these terms apart: ${names.join(', ')}. Take a smaller model, finer steps or wider ranges.`,
+    { terms: names },
+  );
+}
+
+function optimal(request: DesignRequest): BuiltDesign {
   const { factors, constraints, options, blocks, seed, replicates } = request;
   const region = makeRegion(factors, constraints, request.region);
-  const terms = termsOf(factors, modelFor(request));
+  const terms = termsOf(factors, options.model ?? MODELS.optimal);
   const rowAt = compileRow(factors, terms);
-  const random = makeRandom(seed);
-  const sizes = shareOut(runsAsked(request), blocks);
-  const kept = keptPoints(request, sizes);
-  const best = approximateDesign({ region, rowAt, terms: terms.length }, random);
+  const random = seeded(seed, 'design');
+  // centre points come beside the runs asked for, included runs count among them
+  const runs = (options.runs ?? terms.length + EXTRA_OPTIMAL_RUNS) + centreCount(request);
+  const kept = keptPoints(request);
+  const best = bestOn(region, terms);
+  if (!best) throw aliased(terms.map(({ name }) => name));
   const found = optimalDesign(
     {
       lattice: settableLattice(region),
@@ -148,8 +186,8 @@ function optimal(request: ParsedDesign): BuiltDesign {
       criterion: options.criterion ?? 'D',
       blocks,
       kept,
-      free: freeBlocks(sizes, kept),
-      support: best?.support ?? [],
+      free: freeBlocks(shareOut(runs, blocks), kept),
+      support: best.support,
     },
     random,
   );
@@ -161,11 +199,13 @@ function optimal(request: ParsedDesign): BuiltDesign {
     replicatesAreBlocks: false,
     centrePoints: 0,
   });
-  return { ...design, points: numbered([...repeated, ...kept]) };
+  const points = numbered([...repeated, ...kept]);
+  refuseAliased(request, terms, points);
+  return { ...design, points, dBound: boundFrom(best, terms.length) };
 }
 
 /** The points of a design of any kind, in standard order, not yet on the dial. */
-export function buildDesign(request: ParsedDesign): BuiltDesign {
+export function buildDesign(request: DesignRequest): BuiltDesign {
   const { kind } = request;
   if (kind === 'optimal') return optimal(request);
   if (kind === 'spaceFilling') return filling(request);

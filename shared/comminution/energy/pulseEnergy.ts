@@ -1,23 +1,20 @@
 /**
- * Energy stored in the bank for one pulse, ½CV², in J.
+ * Energy stored in the bank for one pulse, J: ½CV².
  *
- * @param capacitanceNf erected capacitance, nF. @param voltageKv charging voltage, kV.
+ * @param capacitanceNf the **erected** capacitance in nF (stage value ÷ stages).
+ * @param voltageKv in kV.
  */
 export function pulseEnergyJ(capacitanceNf: number, voltageKv: number): number {
-  // ½ · 1e-9 F/nF · (1e3 V/kV)²
+  // nF · kV² = mJ
   return 0.0005 * capacitanceNf * voltageKv ** 2;
 }
 
-/**
- * Energy per dry mass in kWh/t. 1 kWh/t = 3.6 J/g.
- *
- * @param energyJ J. @param massG dry mass, g, above 0.
- */
-export function specificEnergyKwhPerT(energyJ: number, massG: number): number {
-  return energyJ / massG / 3.6;
+/** Specific energy in kWh per tonne: 1 kWh/t = 3.6 J/g. */
+export function specificEnergyKwhPerT(totalEnergyJ: number, massG: number): number {
+  return totalEnergyJ / massG / 3.6;
 }
 
-/** Highest pulse rate that the charger keeps up with, Hz: charging power ÷ energy of one pulse. */
-export function chargingLimitHz(chargingPowerW: number, energyJ: number): number {
+/** The highest pulse frequency that the charging power keeps up with, Hz: P ÷ ½CV². */
+export function highestFrequencyHz(chargingPowerW: number, energyJ: number): number {
   return chargingPowerW / energyJ;
 }

@@ -1,194 +1,169 @@
-import { StatsError } from '../../stats/errors';
-import { makeRandom } from '../../stats/random/generator';
-import { specificEnergyKwhPerT } from '../energy/pulseEnergy';
-import type { SieveMass } from '../sieve/sieveCurve';
-import { allOf, type Bed } from './bed';
-import { classOf } from './breakage';
-import {
-  PRACTICE_MATERIALS,
-  PRACTICE_RIG,
-  type Material,
-  type PracticeMaterial,
-  type PracticeRig,
-} from './materials';
-import { measure, type Sieving } from './measure';
-import { noiseOf, type Noise } from './noise';
-import { LOWER_MM, RIG_SIEVES_MM, type Masses } from './sizeClasses';
-import { treat, type Treated, type Treatment } from './treat';
+import { seeded, type Random } from '../../stats/random/random';
+import { pulseEnergyJ } from '../energy/pulseEnergy';
+import { breakageModel, fedBatch, sumOf, totalOf, type Batch } from './batch';
+import { discharge, PRACTICE_RIG, type Rig } from './discharge';
+import { MATERIALS, type Material, type MaterialName } from './materials';
+import { LOWER_MM, MEAN_MM, UPPER_MM, type ClassMasses } from './sizeClasses';
+import { weighed } from './weighing';
 
-/** Free grains from here up count as coarse, mm. */
-const COARSE_FROM_MM = 4;
-/** Spread of a point count of free grains, points of per cent. */
-const COUNT_SD = 1.5;
-
-export interface PracticeRunInput {
-  readonly material: PracticeMaterial;
-  /** kV, mm, pulses, Hz. */
-  readonly setting: {
-    readonly voltage: number;
-    readonly gap: number;
-    readonly pulses: number;
-    readonly frequency: number;
-  };
-  /** Whole number 0 … 2³²−1; null = free of chance, the expected run. */
-  readonly seed: number | null;
+export interface PracticeRun {
+  readonly material: MaterialName;
+  readonly voltageKv: number;
+  readonly gapMm: number;
+  readonly pulses: number;
+  readonly frequencyHz: number;
   readonly feedMassG?: number;
-  /** The lab’s stack, coarse to fine, of sieves that the rig knows; default all 21. */
-  readonly aperturesMm?: readonly number[];
-  /** Toughness on this day against the mean, as a logarithm; 0.04 is usual. */
+  /** Without a seed: the expected run, free of noise. With one: a bag, a firing and a weighing of their own. */
+  readonly seed?: number;
+  /** Toughness of the day in natural-log units. */
   readonly dayEffect?: number;
-  readonly conductivityStartUsPerCm?: number;
-  /** Pulses that the electrode has done: it wears and the gap opens. */
-  readonly pulsesOnElectrode?: number;
-  readonly mode?: Treatment['mode'];
-  readonly screenMm?: number;
-  readonly stages?: number;
-  readonly rig?: Partial<PracticeRig>;
+  readonly rig?: Partial<Rig>;
 }
 
-export interface PracticeRun extends Sieving {
+export interface PracticeResult {
+  /** g by size class, coarse to pan: what is there, and what was weighed (the same without a seed). */
+  readonly truth: ClassMasses;
+  readonly masses: ClassMasses;
+  readonly beforeSievingG: number;
   readonly feedMassG: number;
-  readonly pulses: {
-    readonly set: number;
-    readonly delivered: number;
-    readonly solid: number;
-    readonly water: number;
-    readonly misfires: number;
-  };
-  /** As the monitors show it. */
-  readonly actual: {
-    readonly voltage: number;
-    readonly gap: number;
-    readonly pulses: number;
-    readonly frequency: number;
-  };
-  readonly energyJ: number;
-  readonly specificEnergyKwhPerT: number;
-  readonly durationS: number;
-  readonly conductivityStartUsPerCm: number;
+  /** Pulses through the solid, through water, and misfires; expected counts without a seed. */
+  readonly solid: number;
+  readonly water: number;
+  readonly misfires: number;
+  /** Free grains of each phase, g: all, and those of 4 mm and more. */
+  readonly freeG: Readonly<Record<string, number>>;
+  readonly freeCoarseG: Readonly<Record<string, number>>;
+  readonly totalEnergyJ: number;
   readonly conductivityEndUsPerCm: number;
   readonly temperatureEndC: number;
-  /** Per cent of each phase that is free, and that is free and coarse; as a lab would count them. */
-  readonly freePercent: Readonly<Record<string, number>>;
-  readonly freeCoarsePercent: Readonly<Record<string, number>>;
-  readonly lossPercent: { readonly treatment: number; readonly sieving: number };
-  /** What no bench sees: the masses and shares before any error of measurement. */
-  readonly truth: {
-    readonly sieves: readonly SieveMass[];
-    readonly panG: number;
-    readonly freePercent: Readonly<Record<string, number>>;
-    readonly freeCoarsePercent: Readonly<Record<string, number>>;
-  };
 }
 
-function checkStack(aperturesMm: readonly number[]): void {
-  const unknown = aperturesMm.find((size) => classOf(size) < 0);
-  if (unknown !== undefined)
-    throw new StatsError(
-      'out-of-bounds',
-      `The practice rig has no sieve of ${unknown} mm; it has ${RIG_SIEVES_MM.join(', ')} mm.`,
-    );
+/** What differs from bag to bag and from day to day. */
+interface Bag {
+  readonly hardness: number;
+  readonly material: Material;
+  readonly voltageKv: number;
+  readonly gapMm: number;
 }
 
-function treatmentOf(
-  input: PracticeRunInput,
-  material: Material,
-  rig: PracticeRig,
-  noise: Noise,
-): Treatment {
-  const { setting, dayEffect = 0, pulsesOnElectrode = 0 } = input;
-  const worn = (rig.wearMmPer1000 * pulsesOnElectrode) / 1000;
+function drawBag(run: PracticeRun, material: Material, random: Random | null): Bag {
+  const spread = (sd: number) => (random ? sd * random.normal() : 0);
+  const hardness = Math.exp(spread(material.bagSpread) + (run.dayEffect ?? 0));
+  const strength = material.strengthKvPerMm * Math.exp(spread(0.04));
   return {
-    hardness: Math.exp(noise.gauss(material.feedSpread) + dayEffect),
-    voltageKv: setting.voltage * (1 + noise.gauss(0.008)),
-    gapMm: setting.gap + noise.gauss(0.4) + worn,
-    pulses: setting.pulses,
-    frequencyHz: setting.frequency,
-    feedMassG: input.feedMassG ?? material.feedMassG,
-    conductivityUsPerCm: input.conductivityStartUsPerCm ?? rig.conductivityUsPerCm,
-    mode: input.mode ?? 'closed',
-    screenMm: input.screenMm ?? 2,
-    stages: input.stages ?? 1,
+    hardness,
+    material: { ...material, strengthKvPerMm: strength },
+    voltageKv: run.voltageKv * (1 + spread(0.008)),
+    gapMm: run.gapMm + spread(0.4),
   };
 }
 
-function freeShares(bed: Bed, material: Material, feedMassG: number, from: number) {
-  const grams = (masses: Masses) =>
-    masses.reduce((sum, mass, i) => (LOWER_MM[i]! >= from ? sum + mass : sum), 0);
+function splitFeed(batch: Batch, feedMassG: number, random: Random | null): void {
+  const { composite } = batch;
+  const parts = composite.filter((mass) => mass > 0).length;
+  if (!random || parts < 2) return;
+  composite.forEach((mass, i) => {
+    if (mass > 0) composite[i] = mass * Math.exp(0.06 * random.normal());
+  });
+  const scale = feedMassG / sumOf(composite);
+  composite.forEach((mass, i) => (composite[i] = mass * scale));
+}
+
+/** How many of this pulse go through solid and water: shares without noise, one of them with it. */
+function fire(solid: number, water: number, random: Random | null): [number, number] {
+  if (!random) return [solid, water];
+  const u = random.next();
+  if (u < solid) return [1, 0];
+  return u < solid + water ? [0, 1] : [0, 0];
+}
+
+function freeOf(batch: Batch, material: Material, fromMm: number): Record<string, number> {
   return Object.fromEntries(
-    material.phases.map(({ name, share }, k) => [
+    material.phases.map(({ name }, k) => [
       name,
-      (100 * grams(bed.free[k]!)) / (feedMassG * share),
+      batch.free[k]!.reduce((sum, mass, i) => (LOWER_MM[i]! >= fromMm ? sum + mass : sum), 0),
     ]),
   );
 }
 
-/** A point count: off by a point or two, in tenths, within 0 … 100 %. */
-function counted(shares: Record<string, number>, noise: Noise): Record<string, number> {
-  if (!noise.random) return shares;
-  return Object.fromEntries(
-    Object.entries(shares).map(([name, percent]) => {
-      const read = Math.round((percent + noise.gauss(COUNT_SD)) * 10) / 10;
-      return [name, Math.min(100, Math.max(0, read))];
-    }),
-  );
-}
-
-const rounded = (value: number, decimals: number, noise: Noise) =>
-  noise.random ? Number(value.toFixed(decimals)) : value;
-
-function monitors(treated: Treated, treatment: Treatment, noise: Noise): PracticeRun['actual'] {
-  return {
-    voltage: rounded(treatment.voltageKv, 1, noise),
-    gap: rounded(treatment.gapMm, 1, noise),
-    pulses: treatment.pulses,
-    frequency: rounded(treated.frequencyHz, 2, noise),
-  };
-}
+const belowOneMm = (masses: ClassMasses) =>
+  masses.reduce((sum, mass, i) => (UPPER_MM[i]! <= 1 ? sum + mass : sum), 0);
 
 /**
- * One run on the practice rig: an invented machine with invented materials, for rehearsals and the demo
- * lab. One seed, one run. Never to be shown as a fact about a material.
- *
- * @throws StatsError `out-of-bounds` for a sieve that the rig does not have.
+ * One batch on the practice rig: pulse by pulse, from discharge to breakage to the sieves. Rig and
+ * materials are invented; the result is for learning, rehearsing and testing, never a fact.
  */
-export function runPracticeRig(input: PracticeRunInput): PracticeRun {
-  const { aperturesMm = RIG_SIEVES_MM, seed } = input;
-  checkStack(aperturesMm);
-  const material: Material = PRACTICE_MATERIALS[input.material];
-  const rig = { ...PRACTICE_RIG, ...input.rig };
-  const noise = noiseOf(seed === null ? null : makeRandom(seed));
-  // this sub-sample’s electrical strength
-  const strength = Math.exp(noise.gauss(0.04));
-  const sample = { ...material, field30KvPerMm: material.field30KvPerMm * strength };
-  const treatment = treatmentOf(input, material, rig, noise);
-  const treated = treat(treatment, sample, rig, noise);
-  const { feedMassG, pulses } = treatment;
-  const product = allOf(treated.bed);
-  const sieving = measure(product, aperturesMm, material.lossPercent, noise);
-  const truth = measure(product, aperturesMm, 0, noiseOf(null));
-  const freePercent = freeShares(treated.bed, material, feedMassG, 0);
-  const freeCoarsePercent = freeShares(treated.bed, material, feedMassG, COARSE_FROM_MM);
-  const afterG = sieving.sieves.reduce((sum, { retainedG }) => sum + retainedG, sieving.panG);
-  const { beforeSievingG } = sieving;
-  const { solid, water, misfires, energyJ } = treated;
+export function runPracticeRig(run: PracticeRun): PracticeResult {
+  const rig: Rig = { ...PRACTICE_RIG, ...run.rig };
+  const base: Material = MATERIALS[run.material];
+  const random = run.seed === undefined ? null : seeded(run.seed, 'practice rig');
+  const feedMassG = run.feedMassG ?? base.feedMassG;
+  const bag = drawBag(run, base, random);
+  const batch = fedBatch(base, feedMassG);
+  splitFeed(batch, feedMassG, random);
+  const model = breakageModel(base, bag.hardness);
+  const frequencyHz = Math.min(
+    run.frequencyHz,
+    rig.chargingPowerW / pulseEnergyJ(rig.capacitanceNf, run.voltageKv),
+  );
+  // bubbles and an unsettled bed
+  const settled = 1 - 0.1 * (frequencyHz / 5) ** 2;
+  const storedJ = pulseEnergyJ(rig.capacitanceNf, bag.voltageKv);
+  let conductivity = rig.startConductivityUsPerCm;
+  let temperature = rig.startTemperatureC;
+  let solid = 0;
+  let water = 0;
+
+  for (let n = 1; n <= run.pulses; n++) {
+    const total = totalOf(batch);
+    const gapMm = bag.gapMm + (rig.wearMmPer1000 * n) / 1000;
+    const leached = (base.leach * belowOneMm(total)) / rig.waterL;
+    conductivity =
+      (rig.startConductivityUsPerCm + leached) * (1 + 0.02 * (temperature - rig.startTemperatureC));
+    const outlook = discharge(
+      { voltageKv: bag.voltageKv, gapMm, conductivityUsPerCm: conductivity },
+      bag.material,
+      rig,
+    );
+    const bridgeG = total.reduce(
+      (sum, mass, i) => sum + mass * Math.min(1, MEAN_MM[i]! / (0.35 * gapMm)),
+      0,
+    );
+    const available = settled * (1 - Math.exp(-bridgeG / base.bridgeMassG));
+    const solidChance = available * outlook.solidProbability;
+    const waterChance = (1 - solidChance) * outlook.waterProbability;
+    const [throughSolid, throughWater] = fire(solidChance, waterChance, random);
+    solid += throughSolid;
+    water += throughWater;
+    temperature += storedJ / (rig.waterL * 4186);
+    let workJ =
+      (throughSolid * outlook.efficiency + throughWater * rig.waterEfficiency) *
+      outlook.availableEnergyJ;
+    if (random && workJ > 0) workJ *= Math.exp(-0.02 + 0.2 * random.normal());
+    if (workJ <= 0) continue;
+    const crushedG = Math.min(
+      0.3 * sumOf(total),
+      base.crushedGPerJ * workJ * Math.max(outlook.over, 0.3) ** base.crushedExponent,
+    );
+    model.break(batch, workJ);
+    model.crush(batch, crushedG);
+  }
+
+  const truth = totalOf(batch);
+  const measured = random
+    ? weighed(truth, feedMassG, base.lossPercent, random)
+    : { masses: truth, beforeSievingG: sumOf(truth) };
   return {
-    ...sieving,
+    truth,
+    ...measured,
     feedMassG,
-    pulses: { set: pulses, delivered: pulses, solid, water, misfires },
-    actual: monitors(treated, treatment, noise),
-    energyJ,
-    specificEnergyKwhPerT: specificEnergyKwhPerT(energyJ, feedMassG),
-    durationS: pulses / treated.frequencyHz,
-    conductivityStartUsPerCm: treatment.conductivityUsPerCm,
-    conductivityEndUsPerCm: rounded(treated.conductivityUsPerCm, 0, noise),
-    temperatureEndC: rounded(treated.temperatureC, 1, noise),
-    freePercent: counted(freePercent, noise),
-    freeCoarsePercent: counted(freeCoarsePercent, noise),
-    lossPercent: {
-      treatment: (100 * (feedMassG - beforeSievingG)) / feedMassG,
-      sieving: (100 * (beforeSievingG - afterG)) / beforeSievingG,
-    },
-    truth: { sieves: truth.sieves, panG: truth.panG, freePercent, freeCoarsePercent },
+    solid,
+    water,
+    misfires: run.pulses - solid - water,
+    freeG: freeOf(batch, base, 0),
+    freeCoarseG: freeOf(batch, base, 4),
+    totalEnergyJ: storedJ * run.pulses,
+    conductivityEndUsPerCm: conductivity,
+    temperatureEndC: temperature,
   };
 }

@@ -6,7 +6,7 @@ import {
   regionSchema,
   settingsSchema,
 } from './common';
-import { evaluationSchema } from './evaluate';
+import type { EvaluateAnswer } from './evaluate';
 
 export const DESIGN_KINDS = [
   'factorial',
@@ -22,18 +22,12 @@ export const DESIGN_KINDS = [
 export const designKindSchema = z.enum(DESIGN_KINDS);
 export type DesignKind = z.infer<typeof designKindSchema>;
 
-const MAX_RUNS = 2000;
-const wholeNumber = z.number('Enter a whole number.').int('Enter a whole number.');
-
 export const designOptionsSchema = z.strictObject({
-  /** fractional: like `frequency=voltage:gap:pulses`. */
-  generators: z.array(z.string().max(300)).max(11).optional(),
-  /** fractional, centralComposite: p of 2^(k−p). */
-  fraction: wholeNumber.min(0).max(11).optional(),
-  /** fractional: true = all signs reversed, or the key of the one factor that is. */
+  generators: z.array(z.string().max(200)).max(11).optional(),
+  fraction: z.number().int().min(0).max(11).optional(),
+  /** true: all signs reversed; a key: the signs of that factor. */
   foldOver: z.union([z.boolean(), z.string().max(60)]).optional(),
-  /** plackettBurman, optimal, spaceFilling: runs in all. */
-  runs: wholeNumber.min(1, 'Ask for at least one run.').max(MAX_RUNS).optional(),
+  runs: z.number().int().min(1).max(500).optional(),
   alpha: z
     .union([
       z.enum([
@@ -44,20 +38,18 @@ export const designOptionsSchema = z.strictObject({
         'orthogonalBlocks',
         'fourthRoot',
       ]),
-      z.number().positive('The axial distance is above 0.').max(10),
+      z.number().gt(0.1, 'Alpha is above 0.1.').max(10),
     ])
     .optional(),
   inscribed: z.boolean().optional(),
   criterion: z.enum(['D', 'I']).optional(),
-  /** The model that an optimal design is made for, and that any design is evaluated for. */
   model: modelSchema.optional(),
-  /** optimal: runs that stay. */
   include: z
-    .array(z.strictObject({ settings: settingsSchema, block: wholeNumber.min(1).optional() }))
-    .max(MAX_RUNS)
+    .array(z.strictObject({ settings: settingsSchema, block: z.number().int().min(1).default(1) }))
+    .max(500)
     .optional(),
 });
-export type DesignOptions = z.infer<typeof designOptionsSchema>;
+export type DesignOptions = z.output<typeof designOptionsSchema>;
 
 export const designRequestSchema = z.strictObject({
   factors: factorsSchema,
@@ -65,18 +57,16 @@ export const designRequestSchema = z.strictObject({
   region: regionSchema,
   kind: designKindSchema,
   options: designOptionsSchema.default({}),
-  blocks: wholeNumber.min(1).max(100).default(1),
-  /** In all. Default 6; none extra in threeLevel, one in definitiveScreening, none in optimal and
-   * spaceFilling (where they count among `runs`). */
-  centrePoints: wholeNumber.min(0).max(200).optional(),
-  replicates: wholeNumber.min(1).max(50).default(1),
-  seed: wholeNumber.min(0).max(4_294_967_295).default(7),
+  blocks: z.number().int().min(1).max(32).default(1),
+  /** In all; beside `options.runs` of an optimal design. Left out: 6 for factorial, fractional, central
+   * composite and Box–Behnken designs of numeric factors, 1 for definitive screening, else none. */
+  centrePoints: z.number().int().min(0).max(100).optional(),
+  replicates: z.number().int().min(1).max(20).default(1),
+  seed: z.number().int().min(0).max(4_294_967_295).default(7),
   randomise: z.boolean().default(true),
   snap: z.boolean().default(true),
 });
-export type DesignRequest = z.input<typeof designRequestSchema>;
-
-const settingOut = z.union([z.number(), z.string()]);
+export type DesignRequest = z.output<typeof designRequestSchema>;
 
 export const POINT_TYPES = [
   'factorial',
@@ -87,35 +77,30 @@ export const POINT_TYPES = [
   'spaceFilling',
   'included',
 ] as const;
+export type PointType = (typeof POINT_TYPES)[number];
 
-export const designRunSchema = z.object({
-  runOrder: z.number(),
-  standardOrder: z.number(),
-  block: z.number(),
-  pointType: z.enum(POINT_TYPES),
-  coded: z.record(z.string(), settingOut),
-  settings: z.record(z.string(), settingOut),
-});
+export interface DesignRun {
+  readonly runOrder: number;
+  readonly standardOrder: number;
+  readonly block: number;
+  readonly pointType: PointType;
+  readonly coded: Readonly<Record<string, number | string>>;
+  readonly settings: Readonly<Record<string, number | string>>;
+}
 
-export const designAnswerSchema = z.object({
-  /** In run order. */
-  runs: z.array(designRunSchema),
-  properties: z.object({
-    /** Axial distance over that of the factorial points. */
-    alpha: z.number().nullable(),
-    resolution: z.number().nullable(),
-    generators: z.array(z.string()),
-    definingRelation: z.array(z.array(z.string())),
-    /** Groups of effects that cannot be told apart; a leading − reverses the sign. */
-    aliases: z.array(z.array(z.string())),
-    /** Effects lost to blocks. */
-    confounded: z.array(z.string()),
-    /** Share of |M|^(1/p) lost by snapping; null when the model cannot be fitted. */
-    snapLoss: z.number().nullable(),
-    /** The generator of random numbers that gave the order. */
-    random: z.string(),
-    notes: z.array(z.string()),
-  }),
-  evaluation: evaluationSchema,
-});
-export type DesignAnswer = z.infer<typeof designAnswerSchema>;
+export interface DesignAnswer {
+  readonly runs: readonly DesignRun[];
+  readonly properties: {
+    readonly alpha?: number;
+    readonly resolution?: number;
+    readonly generators?: readonly string[];
+    readonly definingRelation?: readonly (readonly string[])[];
+    readonly aliases?: readonly (readonly string[])[];
+    /** Effects that blocks take with them. */
+    readonly confounded?: readonly string[];
+    /** Share of D-efficiency lost by snapping to settable steps. */
+    readonly snapLoss: number | null;
+  };
+  readonly evaluation: EvaluateAnswer;
+  readonly warnings: readonly { code: string; message: string }[];
+}

@@ -15,55 +15,53 @@ export const evaluateRequestSchema = z.strictObject({
     .array(
       z.strictObject({
         settings: settingsSchema,
-        block: z.number().int().min(1).max(1000).default(1),
+        block: z.number().int().min(1).default(1),
+        // a run as fit takes it may be handed over whole
+        id: z.union([z.string(), z.number()]).optional(),
+        value: z.number().nullable().optional(),
       }),
     )
-    .min(1, 'There is no run to evaluate.')
-    .max(5000, 'At most 5000 runs are evaluated.'),
+    .min(1, 'There are no runs.')
+    .max(1000),
   model: modelSchema.default('quadratic'),
-  /** Change in the response from low to high of a factor; for a square, from centre to high. */
-  effect: z.number('Enter the change that matters.').positive('The change is above 0.').optional(),
-  sigma: z.number('Enter the run-to-run spread.').positive('The spread is above 0.').optional(),
+  effect: z.number().positive('An effect is above 0.').nullable().optional(),
+  sigma: z.number().positive('A spread is above 0.').nullable().optional(),
   significance: z.number().gt(0).lt(1).default(0.05),
 });
-export type EvaluateRequest = z.input<typeof evaluateRequestSchema>;
+export type EvaluateRequest = z.output<typeof evaluateRequestSchema>;
 
-const nullable = z.number().nullable();
-
-export const evaluationSchema = z.object({
+export interface EvaluateAnswer {
   /** Coefficients to be estimated, blocks included. */
-  parameters: z.number(),
-  rank: z.number(),
-  residualDf: z.number(),
-  estimable: z.array(z.string()),
-  notEstimable: z.array(z.string()),
-  /** The criteria are for the model without block effects; 0 when its terms cannot be separated. */
-  dEfficiency: z.number(),
-  dBound: nullable,
-  dRelative: nullable,
-  aEfficiency: z.number(),
-  gEfficiency: z.number(),
-  iAverage: nullable,
-  terms: z.array(
-    z.object({
-      term: z.string(),
-      relativeStandardError: nullable,
-      vif: nullable,
-      power: nullable,
-    }),
-  ),
-  leverages: z.array(z.number()),
-  predictionVariance: z
-    .object({ fractions: z.array(z.number()), scaled: z.array(z.number()), max: z.number() })
-    .nullable(),
-  correlations: z.object({ terms: z.array(z.string()), matrix: z.array(z.array(nullable)) }),
-  aliasMatrix: z
-    .object({
-      terms: z.array(z.string()),
-      aliased: z.array(z.string()),
-      matrix: z.array(z.array(z.number())),
-    })
-    .nullable(),
-  warnings: z.array(z.object({ code: z.string(), message: z.string() })),
-});
-export type EvaluateAnswer = z.infer<typeof evaluationSchema>;
+  readonly parameters: number;
+  readonly rank: number;
+  readonly residualDf: number;
+  readonly estimable: readonly string[];
+  readonly notEstimable: readonly string[];
+  /** The criteria are for the model without block effects; null when its terms cannot be separated. */
+  readonly dEfficiency: number | null;
+  readonly dBound: number | null;
+  readonly dRelative: number | null;
+  readonly aEfficiency: number | null;
+  readonly gEfficiency: number | null;
+  readonly iAverage: number | null;
+  readonly terms: readonly {
+    term: string;
+    relativeStandardError: number | null;
+    vif: number | null;
+    power: number | null;
+  }[];
+  readonly leverages: readonly number[];
+  readonly predictionVariance: {
+    readonly fractions: readonly number[];
+    readonly scaled: readonly number[];
+    readonly max: number;
+  } | null;
+  readonly correlations: {
+    readonly terms: readonly string[];
+    /** null: a column that does not vary correlates with nothing. */
+    readonly matrix: readonly (readonly (number | null)[])[];
+  };
+  /** How terms left out of the model would leak into its terms: rows by model term, columns by term left out. */
+  readonly aliasMatrix: Readonly<Record<string, Readonly<Record<string, number>>>> | null;
+  readonly warnings: readonly { code: string; message: string }[];
+}

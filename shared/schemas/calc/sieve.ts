@@ -1,93 +1,96 @@
 import { z } from 'zod';
 
-const number = z.number('Enter a number.');
-const massG = number.min(0, 'A mass cannot be negative. Check the tare.').max(1e7);
-const apertureMm = number.positive('A sieve opening is above 0 mm.').max(1000);
-const percentLimit = number.min(0).max(100);
+const massG = z.number('Enter the mass in g.').min(0, 'A mass cannot be below 0 g.').max(1e9);
+const percent = z.number().min(0).max(100);
 
-export const sieveMassSchema = z.strictObject({ apertureMm, retainedG: massG });
-
-export const sieveLimitsSchema = z.strictObject({
-  treatmentWarn: percentLimit.default(1),
-  treatmentRepeat: percentLimit.default(2),
-  sievingWarn: percentLimit.default(0.3),
-  sievingRepeat: percentLimit.default(1),
-});
-
-/** Names the sieve that is there twice; 500 µm and 0.5 mm are one sieve. */
-function checkApertures(
-  sieves: readonly { apertureMm: number }[],
-  issue: (path: (string | number)[], message: string) => void,
-): void {
-  sieves.forEach((sieve, i) => {
-    const first = sieves.findIndex(
-      (other) => Math.abs(other.apertureMm - sieve.apertureMm) <= 1e-9 * sieve.apertureMm,
-    );
-    if (first < i)
-      issue(
-        ['sieves', i, 'apertureMm'],
-        `The sieve of ${sieve.apertureMm} mm is there twice: keep one.`,
-      );
+/** Losses in percent at which a balance warns, and at which the run should be repeated. */
+export const sieveLimitsSchema = z
+  .strictObject({
+    treatmentWarn: percent.default(1),
+    treatmentRepeat: percent.default(2),
+    sievingWarn: percent.default(0.3),
+    sievingRepeat: percent.default(1),
+  })
+  .superRefine((limits, ctx) => {
+    if (limits.treatmentWarn > limits.treatmentRepeat)
+      ctx.addIssue({
+        code: 'custom',
+        path: ['treatmentWarn'],
+        message: 'The warning limit lies above the repeat limit.',
+      });
+    if (limits.sievingWarn > limits.sievingRepeat)
+      ctx.addIssue({
+        code: 'custom',
+        path: ['sievingWarn'],
+        message: 'The warning limit lies above the repeat limit.',
+      });
   });
-}
 
-/** Masses of one sieving: opening in mm, masses in g, limits and percentiles in per cent. */
 export const sieveRequestSchema = z
   .strictObject({
-    feedMassG: number.positive('The feed is above 0 g.').max(1e7),
-    beforeSievingG: number.positive('The mass before sieving is above 0 g.').max(1e7).optional(),
-    massBasis: z.enum(['dry', 'wet']).default('dry'),
-    sieves: z.array(sieveMassSchema).min(1, 'Enter at least one sieve.').max(100),
+    feedMassG: massG.gt(0, 'The feed is above 0 g.'),
+    beforeSievingG: massG.optional(),
+    massBasis: z.literal('dry').default('dry'),
+    sieves: z
+      .array(
+        z.strictObject({
+          apertureMm: z.number().positive('A sieve opening is above 0 mm.').max(2000),
+          retainedG: massG,
+        }),
+      )
+      .min(1, 'Enter at least one sieve.')
+      .max(60),
     panG: massG,
-    passingAt: z.array(apertureMm).max(100).default([]),
-    percentiles: z.array(number.gt(0).lt(100)).max(100).default([]),
+    passingAt: z.array(z.number().positive('A size is above 0 mm.')).max(60).default([]),
+    percentiles: z
+      .array(z.number().gt(0, 'A percentile lies between 0 and 100.').lt(100))
+      .max(20)
+      .default([80, 50]),
     interpolation: z.enum(['logSize', 'logLog']).default('logSize'),
-    limits: sieveLimitsSchema.optional(),
+    limits: sieveLimitsSchema.default({
+      treatmentWarn: 1,
+      treatmentRepeat: 2,
+      sievingWarn: 0.3,
+      sievingRepeat: 1,
+    }),
   })
-  .superRefine((request, ctx) => {
-    checkApertures(request.sieves, (path, message) => {
-      ctx.addIssue({ code: 'custom', path, message });
+  .superRefine(({ sieves }, ctx) => {
+    sieves.forEach(({ apertureMm }, i) => {
+      if (sieves.findIndex((other) => other.apertureMm === apertureMm) < i)
+        ctx.addIssue({
+          code: 'custom',
+          path: ['sieves', i, 'apertureMm'],
+          message: `The sieve of ${apertureMm} mm is there twice: keep one.`,
+        });
     });
   });
-export type SieveRequest = z.input<typeof sieveRequestSchema>;
+export type SieveRequest = z.output<typeof sieveRequestSchema>;
 
-const warningSchema = z.object({ code: z.string(), message: z.string() });
+export interface BalanceAnswer {
+  readonly lossG: number;
+  readonly lossPercent: number;
+  readonly verdict: 'holds' | 'warn' | 'repeat';
+}
 
-export const massBalanceSchema = z.object({
-  lossG: z.number(),
-  lossPercent: z.number(),
-  verdict: z.enum(['holds', 'warn', 'repeat']),
-});
-export type MassBalance = z.infer<typeof massBalanceSchema>;
-
-export const sieveAnswerSchema = z.object({
-  table: z.array(
-    z.object({
-      apertureMm: z.number(),
-      retainedPercent: z.number().nullable(),
-      cumulativePassingPercent: z.number().nullable(),
-    }),
-  ),
-  panPercent: z.number().nullable(),
-  recoveredG: z.number(),
-  passing: z.record(z.string(), z.number().nullable()),
-  percentiles: z.record(z.string(), z.number().nullable()),
-  interpolation: z.enum(['logSize', 'logLog']),
-  balance: z.object({
-    /** Feed against the product before sieving; null when that was not weighed. */
-    treatment: massBalanceSchema.nullable(),
-    /** Product before sieving against the sum after; null when it was not weighed. */
-    sieving: massBalanceSchema.nullable(),
-    /** Feed against the sum after sieving, judged by the limits of the treatment. */
-    overall: massBalanceSchema,
-  }),
-  shape: z.array(z.object({ apertureMm: z.number(), message: z.string() })),
-  rosinRammler: z
-    .object({ sizeMm: z.number(), slope: z.number(), rSquared: z.number().nullable() })
-    .nullable(),
-  gaudinSchuhmann: z
-    .object({ sizeMm: z.number(), slope: z.number(), rSquared: z.number().nullable() })
-    .nullable(),
-  warnings: z.array(warningSchema),
-});
-export type SieveAnswer = z.infer<typeof sieveAnswerSchema>;
+export interface SieveAnswer {
+  readonly table: readonly {
+    apertureMm: number;
+    retainedPercent: number;
+    cumulativePassingPercent: number;
+  }[];
+  /** By size in mm as text; null outside the stack. */
+  readonly passing: Readonly<Record<string, number | null>>;
+  /** By percent as text; null outside the stack. */
+  readonly percentiles: Readonly<Record<string, number | null>>;
+  readonly interpolation: 'logSize' | 'logLog';
+  readonly recoveredG: number;
+  readonly balance: {
+    readonly treatment: BalanceAnswer | null;
+    readonly sieving: BalanceAnswer | null;
+    readonly overall: BalanceAnswer;
+  };
+  readonly shape: readonly { apertureMm: number; message: string }[];
+  readonly rosinRammler: { sizeMm: number; slope: number; rSquared: number } | null;
+  readonly gaudinSchuhmann: { sizeMm: number; slope: number; rSquared: number } | null;
+  readonly warnings: readonly { code: string; message: string }[];
+}

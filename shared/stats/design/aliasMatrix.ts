@@ -1,5 +1,5 @@
 import { isCategorical, type Factor } from '../coding/factor';
-import { inverseFrom, cholesky } from '../linalg/cholesky';
+import { inverseOf, cholesky } from '../linalg/cholesky';
 import type { Matrix } from '../linalg/matrix';
 import { modelMatrix, type Point } from '../model/modelMatrix';
 import { order, termsOf, type Term } from '../model/term';
@@ -65,7 +65,7 @@ export function aliasMatrix(
   const p = x.cols;
   const l = cholesky(crossProduct(x, x), p);
   if (!l) return null;
-  const inverse = inverseFrom(l, p);
+  const inverse = inverseOf(l, p);
   const xz = crossProduct(x, z);
   const matrix = Array.from({ length: p }, (_, a) =>
     Array.from({ length: z.cols }, (_each, j) => {

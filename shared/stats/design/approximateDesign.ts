@@ -1,6 +1,6 @@
 import type { RowAt } from '../model/compileRow';
-import type { Random } from '../random/generator';
-import type { Region } from './region';
+import type { Random } from '../random/random';
+import type { DesignRegion } from './designRegion';
 import { candidatesOf, climb, type Variance } from './varianceSearch';
 import { exchangeVertices, multiply, NO_WEIGHT, type WeightedDesign } from './weightedDesign';
 
@@ -39,7 +39,7 @@ function startsOf(points: readonly (readonly number[])[], d: Float64Array) {
 }
 
 export interface ApproximateTask {
-  readonly region: Region;
+  readonly region: DesignRegion;
   readonly rowAt: RowAt;
   /** p, the number of terms. */
   readonly terms: number;

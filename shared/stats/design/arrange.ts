@@ -1,6 +1,6 @@
 import { isCategorical, type Factor } from '../coding/factor';
-import type { Random } from '../random/generator';
-import { shuffle } from '../random/shuffle';
+import type { Random } from '../random/random';
+import { shuffled } from '../random/random';
 import type { CodedDesign, CodedPoint } from './codedDesign';
 import { shareOut } from './shareOut';
 
@@ -60,6 +60,6 @@ export function inRunOrder<T extends { block: number; standardOrder: number }>(
     const own = points
       .filter((each) => each.block === block)
       .sort((a, b) => a.standardOrder - b.standardOrder);
-    return random ? shuffle(own, random) : own;
+    return random ? shuffled(own, random) : own;
   });
 }

@@ -1,11 +1,11 @@
-import { cholesky, inverseFrom, logDeterminant, quadraticForm } from '../linalg/cholesky';
+import { cholesky, inverseOf, lnDeterminant, bilinear } from '../linalg/cholesky';
 import type { Matrix } from '../linalg/matrix';
 import { compileRow } from '../model/compileRow';
 import type { Term } from '../model/term';
-import { makeRandom } from '../random/generator';
-import { approximateDesign } from './approximateDesign';
+import { seeded } from '../random/random';
+import { approximateDesign, type ApproximateDesign } from './approximateDesign';
 import { informationOf } from './designMatrix';
-import { spreadOver, type Region } from './region';
+import { spreadOver, type DesignRegion } from './designRegion';
 import { regionMoments } from './regionMoments';
 import { candidatesOf, climb } from './varianceSearch';
 
@@ -16,11 +16,11 @@ const CURVE_STEPS = 50;
 const STARTS = 6;
 
 export interface Criteria {
-  readonly dEfficiency: number;
+  readonly dEfficiency: number | null;
   readonly dBound: number | null;
   readonly dRelative: number | null;
-  readonly aEfficiency: number;
-  readonly gEfficiency: number;
+  readonly aEfficiency: number | null;
+  readonly gEfficiency: number | null;
   readonly iAverage: number | null;
   readonly predictionVariance: {
     readonly fractions: number[];
@@ -29,26 +29,49 @@ export interface Criteria {
   } | null;
 }
 
-/** Rigorous upper bound of |M|^(1/p) over all designs on the region; null when none separates the terms. */
-export function upperBoundD(region: Region, terms: readonly Term[]): number | null {
+/**
+ * Products of distinct factors on the cube ±1 without limits: all corners alike give M = I and d ≤ p
+ * everywhere, so 1 is the bound exactly.
+ */
+function isMultilinearOnCube(region: DesignRegion, terms: readonly Term[]): boolean {
+  const isCube =
+    !region.hasLimits && region.low.every((x) => x === -1) && region.high.every((x) => x === 1);
+  return (
+    isCube &&
+    terms.every(({ powers, contrasts }) => contrasts.length === 0 && powers.every((n) => n <= 1))
+  );
+}
+
+/** The best approximate design on a region; null when no design there separates the terms. */
+export function bestOn(region: DesignRegion, terms: readonly Term[]): ApproximateDesign | null {
   const rowAt = compileRow(region.factors, terms);
-  const best = approximateDesign({ region, rowAt, terms: terms.length }, makeRandom(SEED));
-  if (!best) return null;
-  return Math.exp(best.logDet / terms.length) * (best.maxVariance / terms.length);
+  return approximateDesign({ region, rowAt, terms: terms.length }, seeded(SEED, 'evaluation'));
+}
+
+/** The bound that an approximate design proves: |M|^(1/p) · max d/p. */
+export function boundFrom({ logDet, maxVariance }: ApproximateDesign, terms: number): number {
+  return Math.exp(logDet / terms) * (maxVariance / terms);
+}
+
+/** Rigorous upper bound of |M|^(1/p) over all designs on the region; null when none separates the terms. */
+export function upperBoundD(region: DesignRegion, terms: readonly Term[]): number | null {
+  if (isMultilinearOnCube(region, terms)) return 1;
+  const best = bestOn(region, terms);
+  return best && boundFrom(best, terms.length);
 }
 
 /** Scaled prediction variance over shares of the region, and its largest value in it. */
-function varianceOver(region: Region, terms: readonly Term[], inverse: Float64Array) {
+function varianceOver(region: DesignRegion, terms: readonly Term[], inverse: Float64Array) {
   const rowAt = compileRow(region.factors, terms);
   const p = terms.length;
   const task = { region, rowAt, inverse, terms: p };
   const row = new Float64Array(p);
   const at = (point: readonly number[]) => {
     rowAt(point, row);
-    return quadraticForm(inverse, row, p);
+    return bilinear(inverse, row, row);
   };
   const spread = Float64Array.from(spreadOver(region, CURVE_POINTS), at).sort();
-  const random = makeRandom(SEED);
+  const random = seeded(SEED, 'evaluation');
   const found = candidatesOf(region, random)
     .map((point) => ({ point, value: at(point) }))
     .sort((a, b) => b.value - a.value);
@@ -71,7 +94,7 @@ function varianceOver(region: Region, terms: readonly Term[], inverse: Float64Ar
  */
 export function criteriaOf(
   x: Matrix,
-  region: Region,
+  region: DesignRegion,
   terms: readonly Term[],
   bound: number | null,
 ): Criteria {
@@ -82,16 +105,16 @@ export function criteriaOf(
   );
   if (!l)
     return {
-      dEfficiency: 0,
+      dEfficiency: null,
       dBound: bound,
-      dRelative: bound === null ? null : 0,
-      aEfficiency: 0,
-      gEfficiency: 0,
+      dRelative: null,
+      aEfficiency: null,
+      gEfficiency: null,
       iAverage: null,
       predictionVariance: null,
     };
-  const inverse = inverseFrom(l, p);
-  const dEfficiency = Math.exp(logDeterminant(l, p) / p);
+  const inverse = inverseOf(l, p);
+  const dEfficiency = Math.exp(lnDeterminant(l, p) / p);
   let trace = 0;
   for (let a = 0; a < p; a++) trace += inverse[a * p + a]!;
   const moments = regionMoments(region, terms, compileRow(region.factors, terms));

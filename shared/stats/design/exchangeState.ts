@@ -1,4 +1,4 @@
-import { cholesky, inverseFrom, logDeterminant, quadraticForm } from '../linalg/cholesky';
+import { cholesky, inverseOf, lnDeterminant, bilinear } from '../linalg/cholesky';
 
 /** D: largest |X′X|. I: smallest mean prediction variance over the region. */
 export type Criterion = 'D' | 'I';
@@ -51,7 +51,7 @@ export function stateOfRows(
   for (let a = 0; a < p; a++) m[a * p + a]! += RIDGE;
   const l = cholesky(m, p);
   if (!l) return null;
-  const inverse = inverseFrom(l, p);
+  const inverse = inverseOf(l, p);
   const isD = criterion === 'D';
   return {
     p,
@@ -59,20 +59,8 @@ export function stateOfRows(
     moments,
     inverse,
     product: isD ? inverse : multiply(multiply(inverse, moments, p), inverse, p),
-    value: isD ? logDeterminant(l, p) : -traceOf(inverse, moments),
+    value: isD ? lnDeterminant(l, p) : -traceOf(inverse, moments),
   };
-}
-
-function bilinear(a: Float64Array, f: Float64Array, g: Float64Array, p: number): number {
-  let total = 0;
-  for (let i = 0; i < p; i++) {
-    const left = f[i]!;
-    if (left === 0) continue;
-    let row = 0;
-    for (let j = 0; j < p; j++) row += a[i * p + j]! * g[j]!;
-    total += left * row;
-  }
-  return total;
 }
 
 /** What one row has in common with all exchanges against it: computed once a row. */
@@ -85,8 +73,8 @@ export interface OldRow {
 export function oldRowOf(state: ExchangeState, row: Float64Array): OldRow {
   return {
     row,
-    variance: quadraticForm(state.inverse, row, state.p),
-    product: state.criterion === 'I' ? quadraticForm(state.product, row, state.p) : 0,
+    variance: bilinear(state.inverse, row, row),
+    product: state.criterion === 'I' ? bilinear(state.product, row, row) : 0,
   };
 }
 
@@ -96,15 +84,15 @@ export function oldRowOf(state: ExchangeState, row: Float64Array): OldRow {
  * @see Meyer & Nachtsheim (1995), The coordinate-exchange algorithm, Technometrics 37: 60–69.
  */
 export function gainOf(state: ExchangeState, old: OldRow, row: Float64Array): number {
-  const { p, inverse, product } = state;
-  const dNew = quadraticForm(inverse, row, p);
-  const dBoth = bilinear(inverse, row, old.row, p);
+  const { inverse, product } = state;
+  const dNew = bilinear(inverse, row, row);
+  const dBoth = bilinear(inverse, row, old.row);
   const ratio = (1 + dNew) * (1 - old.variance) + dBoth * dBoth;
   if (ratio < MIN_RATIO) return -Infinity;
   if (state.criterion === 'D') return Math.log(ratio);
   // trace of K⁻¹S with K = [[1 + dNew, dBoth], [dBoth, dOld − 1]], |K| = −ratio
-  const bNew = quadraticForm(product, row, p);
-  const bBoth = bilinear(product, row, old.row, p);
+  const bNew = bilinear(product, row, row);
+  const bBoth = bilinear(product, row, old.row);
   const sum = (old.variance - 1) * bNew - 2 * dBoth * bBoth + (1 + dNew) * old.product;
   return -sum / ratio;
 }

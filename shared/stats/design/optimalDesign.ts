@@ -1,6 +1,6 @@
 import { StatsError } from '../errors';
 import type { RowAt } from '../model/compileRow';
-import type { Random } from '../random/generator';
+import type { Random } from '../random/random';
 import type { ApproximateDesign } from './approximateDesign';
 import { gainOf, oldRowOf, stateOfRows, type Criterion, type ExchangeState } from './exchangeState';
 import { isContinuous, type SettableLattice } from './settableLattice';
@@ -39,20 +39,26 @@ export interface OptimalDesign {
 const MIN_GAIN = 1e-8;
 const MAX_PASSES = 40;
 const ROW_PASSES = 3;
+const MAX_ROWS = 150;
 /** More settable values than this are thinned at first; the last passes see all neighbours. */
 const MAX_LEVELS = 13;
+/** Runs × terms² above which a design is made with three values a factor and without the last passes. */
+const LARGE = 60_000;
+const LARGE_LEVELS = 3;
 /** Multiplications spent on one design: the starts are as many as it allows. */
-const WORK = 2.5e8;
+const WORK = 1.2e8;
 const MAX_STARTS = 24;
-const MIN_STARTS = 2;
+const MIN_STARTS = 1;
 /** Steps around a value that the last passes try, in coded units for a continuous factor. */
 const REFINE = [0.1, 0.05, 0.02, 0.008, 0.003, 0.001];
 
-function thinned(levels: readonly number[]): readonly number[] {
-  if (levels.length <= MAX_LEVELS) return levels;
+const isLarge = ({ free, terms }: OptimalTask) => free.length * terms ** 2 > LARGE;
+
+function thinned(levels: readonly number[], most: number): readonly number[] {
+  if (levels.length <= most) return levels;
   const picked = Array.from(
-    { length: MAX_LEVELS },
-    (_, i) => levels[Math.round((i * (levels.length - 1)) / (MAX_LEVELS - 1))]!,
+    { length: most },
+    (_, i) => levels[Math.round((i * (levels.length - 1)) / (most - 1))]!,
   );
   return [...new Set(picked)];
 }
@@ -153,11 +159,13 @@ function refined({ lattice }: OptimalTask, step: number): Choices {
 
 function improve(work: Working, corners: readonly (readonly number[])[]): void {
   const { task } = work;
-  const levels = task.lattice.levels.map(thinned);
+  const most = isLarge(task) ? LARGE_LEVELS : MAX_LEVELS;
+  const levels = task.lattice.levels.map((each) => thinned(each, most));
   passes(work, (_, i) => levels[i]!);
   // whole rows too: along a slanted limit no single coordinate can move
   for (let pass = 0; pass < ROW_PASSES && rowPass(work, corners); pass++)
     passes(work, (_, i) => levels[i]!);
+  if (isLarge(task)) return;
   for (const step of REFINE) passes(work, refined(task, step));
 }
 
@@ -172,14 +180,30 @@ function startOf(
   const total = support.reduce((sum, { weight }) => sum + weight, 0);
   return free.map((block) => {
     if (!fromSupport) return { point: lattice.draw(random), block };
-    let rest = random.uniform() * total;
+    let rest = random.next() * total;
     const place = support.findIndex(({ weight }) => (rest -= weight) <= 0);
     const point = lattice.nearest(support[Math.max(place, 0)]!.point);
     return { point: point ?? lattice.draw(random), block };
   });
 }
 
-function startCount({ lattice, terms, free }: OptimalTask): number {
+/** Settable points where the approximate design has most weight, for whole-row exchange. */
+function heaviest({ lattice, support }: OptimalTask): number[][] {
+  const seen = new Set<string>();
+  return [...support]
+    .sort((a, b) => b.weight - a.weight)
+    .slice(0, MAX_ROWS)
+    .flatMap(({ point }) => {
+      const nearest = lattice.nearest(point);
+      if (!nearest || seen.has(nearest.join())) return [];
+      seen.add(nearest.join());
+      return [nearest];
+    });
+}
+
+function startCount(task: OptimalTask): number {
+  const { lattice, terms, free } = task;
+  if (isLarge(task)) return MIN_STARTS;
   const tried = lattice.levels.reduce((sum, { length }) => sum + Math.min(length, MAX_LEVELS), 0);
   const onePass = free.length * tried * terms ** 2;
   return Math.max(MIN_STARTS, Math.min(MAX_STARTS, Math.floor(WORK / (8 * onePass))));
@@ -203,10 +227,7 @@ export function optimalDesign(task: OptimalTask, random: Random): OptimalDesign 
       'too-few-runs',
       `The model has ${needed} coefficients, so it needs ${needed} runs or more; there are ${runs}.`,
     );
-  const places = task.support.flatMap(({ point }) => {
-    const nearest = task.lattice.nearest(point);
-    return nearest ? [nearest] : [];
-  });
+  const places = heaviest(task);
   let best: OptimalDesign | null = null;
   for (let start = 0; start < startCount(task); start++) {
     const work = begin(task, startOf(task, places, random));

@@ -1,119 +1,158 @@
-import { fromCoded, toCoded } from '../coding/code';
+import { toCoded } from '../coding/code';
+import { keeps, readConstraint, type Constraint, type ReadConstraint } from '../coding/constraint';
 import { envelopeOf, isCategorical, type Factor } from '../coding/factor';
 import { settableValues } from '../coding/snap';
 import { StatsError } from '../errors';
-import { compileConstraints, isInside, type Constraint } from './constraint';
+import { seeded } from '../random/random';
 
-/** `range`: low … high of each factor. `envelope`: min … max. Always with the limits. */
 export type RegionKind = 'range' | 'envelope';
 
-/** Where a design may lie and predictions are averaged, in coded units. */
-export interface Region {
-  readonly factors: readonly Factor[];
-  /** Bounds of each factor, coded; 0 … levels − 1 for a categorical one. */
-  readonly low: readonly number[];
-  readonly high: readonly number[];
-  readonly hasLimits: boolean;
-  /** Whether a point inside the bounds meets all limits. */
-  readonly isFeasible: (point: ArrayLike<number>) => boolean;
+/** Values that a factor may take in a region: settings, and the same coded. */
+export interface Axis {
+  readonly values: Float64Array;
+  readonly coded: Float64Array;
 }
 
-/**
- * The region of a calculation.
- *
- * @throws StatsError `unknown-term` when a limit names no numeric factor.
- */
-export function makeRegion(
-  factors: readonly Factor[],
-  constraints: readonly Constraint[],
-  kind: RegionKind,
-): Region {
-  const limits = compileConstraints(factors, constraints);
-  const bounds = factors.map((factor) => {
-    if (isCategorical(factor)) return { low: 0, high: factor.levels.length - 1 };
-    const { min, max } = envelopeOf(factor);
-    return kind === 'range'
-      ? { low: -1, high: 1 }
-      : { low: toCoded(factor, min), high: toCoded(factor, max) };
-  });
-  const values = new Float64Array(factors.length);
-  const isFeasible = (point: ArrayLike<number>) => {
-    if (limits.length === 0) return true;
-    factors.forEach((factor, i) => {
-      values[i] = isCategorical(factor) ? NaN : fromCoded(factor, point[i]!);
-    });
-    return isInside(limits, values);
-  };
-  return {
-    factors,
-    low: bounds.map(({ low }) => low),
-    high: bounds.map(({ high }) => high),
-    hasLimits: limits.length > 0,
-    isFeasible,
-  };
-}
-
-/** Values between which a factor without a step is set when a list is needed. */
+/** Levels for a factor without steps: enough for a second-order surface, ends and middle included. */
 const CONTINUOUS_LEVELS = 21;
 
-/**
- * The values that each factor can take in the region, coded and ascending: settable ones, or 21 evenly
- * spaced for a factor without a step; all levels of a categorical factor.
- *
- * @throws StatsError `no-feasible-point` when a factor has no settable value in the region.
- */
-export function settableLevels(region: Region): number[][] {
-  return region.factors.map((factor, i) => {
-    if (isCategorical(factor)) return factor.levels.map((_, level) => level);
-    const [low, high] = [region.low[i]!, region.high[i]!];
-    if (factor.step === undefined)
-      return Array.from(
-        { length: CONTINUOUS_LEVELS },
-        (_, j) => low + ((high - low) * j) / (CONTINUOUS_LEVELS - 1),
-      );
-    const values = settableValues(factor, fromCoded(factor, low), fromCoded(factor, high));
-    if (values.length > 0) return values.map((value) => toCoded(factor, value));
+function axisOf(factor: Factor, region: RegionKind, levels: number): Axis {
+  if (isCategorical(factor)) {
+    const places = Float64Array.from(factor.levels, (_, i) => i);
+    return { values: places, coded: places };
+  }
+  const { min, max } = envelopeOf(factor);
+  const [low, high] = region === 'range' ? [factor.low, factor.high] : [min, max];
+  const settable = settableValues(factor, low, high);
+  const isLog = factor.scale === 'log';
+  const continuous = Array.from({ length: levels }, (_, i) => {
+    const share = i / (levels - 1);
+    return isLog ? low * (high / low) ** share : low + share * (high - low);
+  });
+  const values = Float64Array.from(factor.step === undefined ? continuous : settable);
+  if (values.length === 0)
     throw new StatsError(
       'no-feasible-point',
-      `${factor.key} has no settable value between ${factor.low} and ${factor.high}: its steps miss the range.`,
+      `No settable value of ${factor.key} lies between ${low} and ${high}.`,
     );
-  });
+  return { values, coded: values.map((value) => toCoded(factor, value)) };
 }
 
-/** Tries for each point wanted, before the region counts as empty. */
-const TRIES = 60;
-
-/** The base of the additive sequence in d dimensions: the root of x^(d+1) = x + 1 above 1. */
-function plasticNumber(dimensions: number): number {
-  let x = 2;
-  for (let i = 0; i < 60; i++) x = (1 + x) ** (1 / (dimensions + 1));
-  return x;
+/** The region in which a design or a choice may lie: settable values, inside the constraints. */
+export interface Region {
+  readonly factors: readonly Factor[];
+  readonly axes: readonly Axis[];
+  readonly constraints: readonly ReadConstraint[];
+  /** Number of combinations before the constraints. */
+  readonly size: number;
 }
 
 /**
- * Points spread evenly over the region, the same ones each time. Fewer than asked for when the limits
- * leave little of the bounds.
+ * The lattice of settable combinations of a region.
  *
- * @throws StatsError `no-feasible-point` when none of the points tried meets the limits.
- * @see Roberts (2018), The unreasonable effectiveness of quasirandom sequences (additive recurrence on
- *   the generalised golden ratio).
+ * @param levels values taken of a factor without steps.
+ * @throws StatsError `no-feasible-point` when a factor has no settable value in its range.
  */
-export function spreadOver(region: Region, count: number): number[][] {
-  const { factors, low, high } = region;
-  const base = plasticNumber(factors.length);
-  const steps = factors.map((_, i) => base ** -(i + 1));
-  const points: number[][] = [];
-  for (let n = 1; n <= count * TRIES && points.length < count; n++) {
-    const point = factors.map((factor, i) => {
-      const share = (0.5 + n * steps[i]!) % 1;
-      if (isCategorical(factor)) return Math.floor(share * factor.levels.length);
-      return low[i]! + share * (high[i]! - low[i]!);
-    });
-    if (region.isFeasible(point)) points.push(point);
+export function regionOf(
+  factors: readonly Factor[],
+  constraints: readonly Constraint[],
+  region: RegionKind,
+  levels = CONTINUOUS_LEVELS,
+): Region {
+  const axes = factors.map((factor) => axisOf(factor, region, levels));
+  return {
+    factors,
+    axes,
+    constraints: constraints.map((constraint) => readConstraint(factors, constraint)),
+    size: axes.reduce((product, { values }) => product * values.length, 1),
+  };
+}
+
+/** Whether settings (in the order of the factors) keep all constraints of the region. */
+export function isInside({ constraints }: Region, values: ArrayLike<number>): boolean {
+  return constraints.every((constraint) => keeps(constraint, values));
+}
+
+/** Visits every combination inside the constraints; `places` index into the axes and are reused. */
+export function visitLattice(
+  region: Region,
+  visit: (places: Int32Array, values: Float64Array) => void,
+): void {
+  const { axes } = region;
+  const k = axes.length;
+  const places = new Int32Array(k);
+  const values = Float64Array.from(axes, (axis) => axis.values[0]!);
+  for (;;) {
+    if (isInside(region, values)) visit(places, values);
+    let i = k - 1;
+    while (i >= 0 && places[i]! + 1 >= axes[i]!.values.length) {
+      places[i] = 0;
+      values[i] = axes[i]!.values[0]!;
+      i--;
+    }
+    if (i < 0) return;
+    places[i]!++;
+    values[i] = axes[i]!.values[places[i]!]!;
   }
-  if (points.length > 0) return points;
-  throw new StatsError(
-    'no-feasible-point',
-    'The limits leave no setting inside the ranges. Loosen a limit or widen a range.',
-  );
+}
+
+const codedAt = ({ axes }: Region, places: ArrayLike<number>) =>
+  axes.map((axis, i) => axis.coded[places[i]!]!);
+
+/** A lattice with every axis thinned to at most `most` values, ends and the value nearest the centre kept. */
+function thinned(region: Region, most: number): Region {
+  const axes = region.axes.map((axis, i): Axis => {
+    const n = axis.values.length;
+    if (n <= most || isCategorical(region.factors[i]!)) return axis;
+    const wanted = new Set(
+      Array.from({ length: most }, (_, j) => Math.round((j * (n - 1)) / (most - 1))),
+    );
+    const kept = [...wanted].sort((a, b) => a - b);
+    return {
+      values: Float64Array.from(kept, (j) => axis.values[j]!),
+      coded: Float64Array.from(kept, (j) => axis.coded[j]!),
+    };
+  });
+  return {
+    ...region,
+    axes,
+    size: axes.reduce((product, { values }) => product * values.length, 1),
+  };
+}
+
+/** Full lattice when it is small, else thinned until it has at most `most` combinations. */
+export function latticePoints(region: Region, most: number): number[][] {
+  let used = region;
+  const longest = Math.max(...region.axes.map(({ values }) => values.length));
+  for (let levels = longest; used.size > most && levels > 3; levels--)
+    used = thinned(region, levels);
+  const points: number[][] = [];
+  visitLattice(used, (places) => points.push(codedAt(used, places)));
+  return points;
+}
+
+/**
+ * Points that stand for the region when variance is averaged over it: the lattice itself when it has at
+ * most `most` combinations, else that many drawn from it with a fixed seed.
+ *
+ * @throws StatsError `no-feasible-point` when the constraints leave nothing.
+ */
+export function samplePoints(region: Region, most: number): number[][] {
+  const points: number[][] = [];
+  if (region.size <= most) visitLattice(region, (places) => points.push(codedAt(region, places)));
+  else {
+    const random = seeded(1, 'region sample');
+    const values = new Float64Array(region.axes.length);
+    for (let tries = 0; points.length < most && tries < 60 * most; tries++) {
+      const places = region.axes.map((axis) => random.below(axis.values.length));
+      places.forEach((place, i) => (values[i] = region.axes[i]!.values[place]!));
+      if (isInside(region, values)) points.push(codedAt(region, places));
+    }
+  }
+  if (points.length === 0)
+    throw new StatsError(
+      'no-feasible-point',
+      'The limits leave no settable combination in these ranges. Widen a range or check the limits.',
+    );
+  return points;
 }

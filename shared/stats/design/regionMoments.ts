@@ -1,7 +1,7 @@
 import { isCategorical } from '../coding/factor';
 import type { RowAt } from '../model/compileRow';
 import type { Term } from '../model/term';
-import { spreadOver, type Region } from './region';
+import { spreadOver, type DesignRegion } from './designRegion';
 
 /** Points for a region cut by limits: its moments have no closed form. Error about 0.1 %. */
 const POINTS = 8000;
@@ -19,7 +19,7 @@ function contrastMean(levels: number, wanted: readonly number[]): number {
   return sum / levels;
 }
 
-function exactMoment(region: Region, a: Term, b: Term): number {
+function exactMoment(region: DesignRegion, a: Term, b: Term): number {
   return region.factors.reduce((product, factor, i) => {
     if (isCategorical(factor)) {
       const wanted = [...a.contrasts, ...b.contrasts]
@@ -37,7 +37,11 @@ function exactMoment(region: Region, a: Term, b: Term): number {
  *
  * @returns p × p, row-major.
  */
-export function regionMoments(region: Region, terms: readonly Term[], rowAt: RowAt): Float64Array {
+export function regionMoments(
+  region: DesignRegion,
+  terms: readonly Term[],
+  rowAt: RowAt,
+): Float64Array {
   const p = terms.length;
   const out = new Float64Array(p * p);
   if (!region.hasLimits) {

@@ -1,8 +1,8 @@
 import { isCategorical } from '../coding/factor';
 import { StatsError } from '../errors';
-import type { Random } from '../random/generator';
+import type { Random } from '../random/random';
 import { levelGrid } from './codedDesign';
-import { settableLevels, spreadOver, type Region } from './region';
+import { settableLevels, spreadOver, type DesignRegion } from './designRegion';
 
 /** Lattices up to this size are listed, so that a narrow feasible part is not missed. */
 const LISTED = 20_000;
@@ -10,7 +10,7 @@ const TRIES = 2000;
 
 /** The points that can be dialled in inside the region. */
 export interface SettableLattice {
-  readonly region: Region;
+  readonly region: DesignRegion;
   /** Coded values of each factor, ascending. */
   readonly levels: readonly (readonly number[])[];
   /** A point at random; every one can come. */
@@ -33,7 +33,7 @@ function neighbours(levels: readonly number[], value: number): number[] {
 }
 
 function nearestFeasible(
-  region: Region,
+  region: DesignRegion,
   levels: readonly (readonly number[])[],
   point: readonly number[],
 ): number[] | null {
@@ -54,7 +54,7 @@ function nearestFeasible(
  *
  * @throws StatsError `no-feasible-point` when no settable point meets the limits.
  */
-export function settableLattice(region: Region): SettableLattice {
+export function settableLattice(region: DesignRegion): SettableLattice {
   const levels = settableLevels(region);
   const size = levels.reduce((product, { length }) => product * length, 1);
   const listed =
@@ -81,7 +81,7 @@ export function settableLattice(region: Region): SettableLattice {
 }
 
 /** Whether a factor is set freely between its bounds. */
-export function isContinuous(region: Region, i: number): boolean {
+export function isContinuous(region: DesignRegion, i: number): boolean {
   const factor = region.factors[i]!;
   return !isCategorical(factor) && factor.step === undefined;
 }

@@ -3,12 +3,12 @@ import { envelopeOf, isCategorical, type Factor, type Setting } from '../coding/
 import { snap } from '../coding/snap';
 import { StatsError } from '../errors';
 import {
-  compileConstraints,
-  describeConstraint,
-  isInside,
+  constraintWords,
+  keeps,
+  readConstraint,
   valuesOf,
   type Constraint,
-} from './constraint';
+} from '../coding/constraint';
 
 export interface Settled {
   readonly settings: Record<string, Setting>;
@@ -78,9 +78,9 @@ function brokenBy(
   }
   const values = valuesOf(factors, settings);
   const broken = constraints.find(
-    (constraint) => !isInside(compileConstraints(factors, [constraint]), values),
+    (constraint) => !keeps(readConstraint(factors, constraint), values),
   );
-  return broken ? `it breaks ${describeConstraint(broken)}` : null;
+  return broken ? `it breaks ${constraintWords(broken)}` : null;
 }
 
 export interface OutsidePoint {

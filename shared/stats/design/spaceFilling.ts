@@ -1,7 +1,7 @@
 import { isCategorical } from '../coding/factor';
 import { StatsError } from '../errors';
-import type { Random } from '../random/generator';
-import { shuffle } from '../random/shuffle';
+import type { Random } from '../random/random';
+import { shuffled } from '../random/random';
 import { pointsOf, type CodedDesign } from './codedDesign';
 import type { SettableLattice } from './settableLattice';
 
@@ -21,7 +21,7 @@ function hypercube(lattice: SettableLattice, runs: number, random: Random): numb
       const share = (slice + 0.5) / runs;
       return region.low[i]! + share * (region.high[i]! - region.low[i]!);
     });
-    return shuffle(column, random);
+    return shuffled(column, random);
   });
   return Array.from({ length: runs }, (_, r) => columns.map((column) => column[r]!));
 }

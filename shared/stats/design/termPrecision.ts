@@ -1,4 +1,4 @@
-import { cholesky, inverseFrom } from '../linalg/cholesky';
+import { cholesky, inverseOf } from '../linalg/cholesky';
 import type { Matrix } from '../linalg/matrix';
 import { informationOf } from './designMatrix';
 import type { ColumnSplit } from './independentColumns';
@@ -44,7 +44,7 @@ export function termPrecision(
     }),
   };
   const l = cholesky(informationOf(reduced), q);
-  const inverse = l ? inverseFrom(l, q) : null;
+  const inverse = l ? inverseOf(l, q) : null;
   return names.map((term, j) => {
     const k = independent.indexOf(j);
     if (!inverse || k < 0 || !estimable[j]) return { term, relativeStandardError: null, vif: null };

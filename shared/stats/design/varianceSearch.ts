@@ -1,9 +1,9 @@
 import { isCategorical } from '../coding/factor';
-import { quadraticForm } from '../linalg/cholesky';
+import { bilinear } from '../linalg/cholesky';
 import type { RowAt } from '../model/compileRow';
-import type { Random } from '../random/generator';
+import type { Random } from '../random/random';
 import { levelGrid } from './codedDesign';
-import { spreadOver, type Region } from './region';
+import { spreadOver, type DesignRegion } from './designRegion';
 
 /** Most candidates of a grid; larger grids are sampled. */
 const MAX_CANDIDATES = 2500;
@@ -14,7 +14,7 @@ const BISECTIONS = 30;
 
 /** The point where a line from inside to outside leaves the region (the last point inside). */
 function edgeBetween(
-  region: Region,
+  region: DesignRegion,
   inside: readonly number[],
   outside: readonly number[],
 ): number[] {
@@ -28,7 +28,7 @@ function edgeBetween(
   return good;
 }
 
-function gridOf(region: Region): number[][] {
+function gridOf(region: DesignRegion): number[][] {
   const { factors, low, high, hasLimits } = region;
   const lines = (hasLimits ? LINES_LIMITED : LINES_FREE)[factors.length] ?? 0;
   if (lines === 0) return [];
@@ -42,7 +42,7 @@ function gridOf(region: Region): number[][] {
 }
 
 /** Where grid lines cross the limits: candidates that a grid alone would miss. */
-function edgesOf(region: Region, inside: readonly number[][]): number[][] {
+function edgesOf(region: DesignRegion, inside: readonly number[][]): number[][] {
   const { factors, low, high } = region;
   const lines = LINES_LIMITED[factors.length] ?? 3;
   return inside.flatMap((point) =>
@@ -58,7 +58,11 @@ function edgesOf(region: Region, inside: readonly number[][]): number[][] {
 }
 
 /** Corners drawn at random, for many factors; those outside the limits are pulled to a point inside. */
-function randomCorners(region: Region, inside: readonly number[][], random: Random): number[][] {
+function randomCorners(
+  region: DesignRegion,
+  inside: readonly number[][],
+  random: Random,
+): number[][] {
   const { factors, low, high } = region;
   return Array.from({ length: MAX_CANDIDATES }, (_, n) => {
     const corner = factors.map((factor, i) => {
@@ -79,7 +83,7 @@ function randomCorners(region: Region, inside: readonly number[][], random: Rand
  * Points among which the support of an optimal design and the largest prediction variance are looked
  * for: a grid with its crossings of the limits for few factors, else corners, edges and middles.
  */
-export function candidatesOf(region: Region, random: Random): number[][] {
+export function candidatesOf(region: DesignRegion, random: Random): number[][] {
   const inside = spreadOver(region, 200);
   const grid = gridOf(region).filter((point) => region.isFeasible(point));
   if (grid.length === 0) return [...inside, ...randomCorners(region, inside, random)];
@@ -91,7 +95,12 @@ export function candidatesOf(region: Region, random: Random): number[][] {
 const ROUNDS = 24;
 const FIRST_REACH = 0.25;
 
-function moved(region: Region, point: readonly number[], reach: number, random: Random): number[] {
+function moved(
+  region: DesignRegion,
+  point: readonly number[],
+  reach: number,
+  random: Random,
+): number[] {
   const { factors, low, high } = region;
   // one factor, two, or all at once: along an axis, a slanted limit, anywhere
   const only =
@@ -101,7 +110,7 @@ function moved(region: Region, point: readonly number[], reach: number, random: 
     const factor = factors[i]!;
     if (isCategorical(factor)) return random.below(factor.levels.length);
     const span = high[i]! - low[i]!;
-    return Math.min(high[i]!, Math.max(low[i]!, x + reach * span * (2 * random.uniform() - 1)));
+    return Math.min(high[i]!, Math.max(low[i]!, x + reach * span * (2 * random.next() - 1)));
   });
 }
 
@@ -112,7 +121,7 @@ export interface Variance {
 }
 
 export interface VarianceTask {
-  readonly region: Region;
+  readonly region: DesignRegion;
   readonly rowAt: RowAt;
   /** Inverse information matrix, p × p. */
   readonly inverse: Float64Array;
@@ -127,7 +136,7 @@ export function climb(task: VarianceTask, start: readonly number[], random: Rand
   const row = new Float64Array(terms);
   const valueAt = (point: readonly number[]) => {
     rowAt(point, row);
-    return quadraticForm(inverse, row, terms);
+    return bilinear(inverse, row, row);
   };
   let best: Variance = { point: start, value: valueAt(start) };
   let reach = FIRST_REACH;

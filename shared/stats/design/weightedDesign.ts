@@ -1,4 +1,4 @@
-import { cholesky, inverseFrom, logDeterminant } from '../linalg/cholesky';
+import { cholesky, inverseOf, lnDeterminant } from '../linalg/cholesky';
 
 /** Candidate rows with weights that sum to 1: an approximate design. Changed in place by the steps below. */
 export interface WeightedDesign {
@@ -57,9 +57,9 @@ export function stateOf(design: WeightedDesign): WeightedState | null {
   const { p, rows, weights } = design;
   const l = cholesky(informationOf(design), p);
   if (!l) return null;
-  const inverse = inverseFrom(l, p);
+  const inverse = inverseOf(l, p);
   const d = weights.map((_, i) => dot(rows, i, solveFor(design, inverse, i)));
-  return { inverse, d, logDet: logDeterminant(l, p) };
+  return { inverse, d, logDet: lnDeterminant(l, p) };
 }
 
 /**

@@ -1,66 +1,85 @@
-/** A pivot below this share of its column’s own size means: not positive definite in doubles. */
-const PIVOT_TOLERANCE = 1e-11;
+/** Dense symmetric positive-definite matrices, row-major Float64Array of n × n, for inner loops. */
+
+/** Below this share of its diagonal a pivot counts as 0. */
+const PIVOT = 1e-12;
 
 /**
- * The lower Cholesky factor L of a symmetric positive definite matrix, A = LL′.
+ * The lower triangle L with LLᵀ = A.
  *
- * @param a p × p, row-major; only its lower half is read.
- * @returns p × p, row-major, zeros above the diagonal; null when A is not positive definite within
- *   rounding (relative to each diagonal entry).
- * @see Golub & Van Loan (2013), Matrix Computations, 4th ed., §4.2.
+ * @returns null when A is not positive definite to working accuracy.
  */
-export function cholesky(a: Float64Array, p: number): Float64Array | null {
-  const l = new Float64Array(p * p);
-  for (let i = 0; i < p; i++) {
-    for (let j = 0; j <= i; j++) {
-      let sum = a[i * p + j]!;
-      for (let k = 0; k < j; k++) sum -= l[i * p + k]! * l[j * p + k]!;
-      if (i !== j) l[i * p + j] = sum / l[j * p + j]!;
-      else if (sum > PIVOT_TOLERANCE * a[i * p + i]!) l[i * p + i] = Math.sqrt(sum);
-      else return null;
+export function cholesky(a: Float64Array, n: number): Float64Array | null {
+  const l = new Float64Array(n * n);
+  for (let j = 0; j < n; j++) {
+    let d = a[j * n + j]!;
+    for (let k = 0; k < j; k++) d -= l[j * n + k]! ** 2;
+    if (!(d > PIVOT * Math.abs(a[j * n + j]!)) || !(d > 0)) return null;
+    const root = Math.sqrt(d);
+    l[j * n + j] = root;
+    for (let i = j + 1; i < n; i++) {
+      let sum = a[i * n + j]!;
+      for (let k = 0; k < j; k++) sum -= l[i * n + k]! * l[j * n + k]!;
+      l[i * n + j] = sum / root;
     }
   }
   return l;
 }
 
-/** ln|A| from its Cholesky factor. */
-export function logDeterminant(l: Float64Array, p: number): number {
+/** ln |A| from its Cholesky factor. */
+export function lnDeterminant(l: Float64Array, n: number): number {
   let sum = 0;
-  for (let i = 0; i < p; i++) sum += Math.log(l[i * p + i]!);
+  for (let i = 0; i < n; i++) sum += Math.log(l[i * n + i]!);
   return 2 * sum;
 }
 
-/** A⁻¹ from the Cholesky factor of A; p × p, row-major, symmetric. */
-export function inverseFrom(l: Float64Array, p: number): Float64Array {
-  // L⁻¹ by columns, then A⁻¹ = L⁻′L⁻¹
-  const inv = new Float64Array(p * p);
-  for (let j = 0; j < p; j++) {
-    inv[j * p + j] = 1 / l[j * p + j]!;
-    for (let i = j + 1; i < p; i++) {
-      let sum = 0;
-      for (let k = j; k < i; k++) sum -= l[i * p + k]! * inv[k * p + j]!;
-      inv[i * p + j] = sum / l[i * p + i]!;
+/** A⁻¹ from its Cholesky factor. */
+export function inverseOf(l: Float64Array, n: number): Float64Array {
+  const inverse = new Float64Array(n * n);
+  for (let c = 0; c < n; c++) {
+    for (let i = 0; i < n; i++) {
+      let sum = i === c ? 1 : 0;
+      for (let k = 0; k < i; k++) sum -= l[i * n + k]! * inverse[k * n + c]!;
+      inverse[i * n + c] = sum / l[i * n + i]!;
+    }
+    for (let i = n - 1; i >= 0; i--) {
+      let sum = inverse[i * n + c]!;
+      for (let k = i + 1; k < n; k++) sum -= l[k * n + i]! * inverse[k * n + c]!;
+      inverse[i * n + c] = sum / l[i * n + i]!;
     }
   }
-  const out = new Float64Array(p * p);
-  for (let i = 0; i < p; i++) {
-    for (let j = 0; j <= i; j++) {
-      let sum = 0;
-      for (let k = i; k < p; k++) sum += inv[k * p + i]! * inv[k * p + j]!;
-      out[i * p + j] = sum;
-      out[j * p + i] = sum;
-    }
-  }
-  return out;
+  return inverse;
 }
 
-/** f′A f for a symmetric p × p matrix. */
-export function quadraticForm(a: Float64Array, f: ArrayLike<number>, p: number): number {
-  let total = 0;
-  for (let i = 0; i < p; i++) {
-    let row = 0;
-    for (let j = 0; j < i; j++) row += a[i * p + j]! * f[j]!;
-    total += f[i]! * (2 * row + a[i * p + i]! * f[i]!);
+/** Σ rowᵢ rowᵢᵀ, weighted. */
+export function gramOf(
+  rows: readonly Float64Array[],
+  n: number,
+  weights?: ArrayLike<number>,
+): Float64Array {
+  const gram = new Float64Array(n * n);
+  rows.forEach((row, r) => {
+    const w = weights ? weights[r]! : 1;
+    if (w === 0) return;
+    for (let i = 0; i < n; i++) {
+      const wi = w * row[i]!;
+      if (wi === 0) continue;
+      for (let j = i; j < n; j++) gram[i * n + j]! += wi * row[j]!;
+    }
+  });
+  for (let i = 0; i < n; i++) for (let j = 0; j < i; j++) gram[i * n + j] = gram[j * n + i]!;
+  return gram;
+}
+
+/** xᵀ A y. */
+export function bilinear(a: Float64Array, x: Float64Array, y: Float64Array): number {
+  const n = x.length;
+  let sum = 0;
+  for (let i = 0; i < n; i++) {
+    const xi = x[i]!;
+    if (xi === 0) continue;
+    let inner = 0;
+    for (let j = 0; j < n; j++) inner += a[i * n + j]! * y[j]!;
+    sum += xi * inner;
   }
-  return total;
+  return sum;
 }

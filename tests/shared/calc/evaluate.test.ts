@@ -1,14 +1,24 @@
 import { describe, expect, it } from 'vitest';
-import { designAnswer } from '@shared/calc/design';
-import { evaluateAnswer } from '@shared/calc/evaluate';
+import type { z } from 'zod';
+import { designAnswer as answerOf } from '@shared/calc/design';
+import { evaluateAnswer as evaluationOf } from '@shared/calc/evaluate';
+import { designRequestSchema } from '@shared/schemas/calc/design';
+import { evaluateRequestSchema } from '@shared/schemas/calc/evaluate';
 import { approximateDesign } from '@shared/stats/design/approximateDesign';
-import type { Constraint } from '@shared/stats/design/constraint';
-import { makeRegion } from '@shared/stats/design/region';
+import type { Constraint } from '@shared/stats/coding/constraint';
+import { makeRegion } from '@shared/stats/design/designRegion';
 import { compileRow } from '@shared/stats/model/compileRow';
 import { termsOf } from '@shared/stats/model/term';
-import { makeRandom } from '@shared/stats/random/generator';
-import continuous from '../../reference/data/optimal_continuous.json';
-import exact from '../../reference/data/optimal_exact.json';
+import { seeded } from '@shared/stats/random/random';
+import continuous from '../../reference/data/published/optimal_continuous.json' with { type: 'json' };
+import { powerOf } from '@shared/stats/design/power';
+import power from '../../reference/data/published/power.json' with { type: 'json' };
+import exact from '../../reference/data/published/optimal_exact.json' with { type: 'json' };
+
+const designAnswer = (request: z.input<typeof designRequestSchema>) =>
+  answerOf(designRequestSchema.parse(request));
+const evaluateAnswer = (request: z.input<typeof evaluateRequestSchema>) =>
+  evaluationOf(evaluateRequestSchema.parse(request));
 
 const plain = (k: number) =>
   Array.from({ length: k }, (_, i) => ({ key: `x${i + 1}`, low: -1, high: 1 }));
@@ -18,7 +28,7 @@ function bestOn(k: number, constraints: readonly Constraint[]) {
   const terms = termsOf(factors, 'quadratic');
   const region = makeRegion(factors, constraints, 'range');
   const task = { region, rowAt: compileRow(factors, terms), terms: terms.length };
-  return approximateDesign(task, makeRandom(1))!;
+  return approximateDesign(task, seeded(1, 'test'))!;
 }
 
 describe('the best approximate design', () => {
@@ -63,7 +73,7 @@ describe('standard designs', () => {
     const relative = entry.D_efficiency_vs_continuous_optimum_on_cube;
     expect(evaluation.dRelative! / relative).toBeGreaterThan(0.999);
     expect(evaluation.dRelative! / relative).toBeLessThan(1 + 1e-9);
-    expect(evaluation.dEfficiency).toBeCloseTo(Math.exp(entry.logdet_per_run / entry.p), 10);
+    expect(evaluation.dEfficiency!).toBeCloseTo(Math.exp(entry.logdet_per_run / entry.p), 10);
     expect(evaluation.iAverage).toBeCloseTo(entry.average_scaled_prediction_variance_over_cube, 9);
     // the reference looks at a grid: the search may find a little more
     const { max } = evaluation.predictionVariance!;
@@ -86,7 +96,12 @@ describe('evaluation', () => {
     expect(answer.rank).toBe(4);
     expect(answer.estimable).toEqual(['x1', 'x2', 'x1:x2']);
     expect(answer.notEstimable).toEqual(['intercept', 'x1^2', 'x2^2']);
-    expect(answer).toMatchObject({ dEfficiency: 0, dRelative: 0, gEfficiency: 0, iAverage: null });
+    expect(answer).toMatchObject({
+      dEfficiency: null,
+      dRelative: null,
+      gEfficiency: null,
+      iAverage: null,
+    });
     expect(answer.terms[1]).toMatchObject({ term: 'x1', relativeStandardError: 0.5, vif: 1 });
     expect(answer.terms[4]).toMatchObject({ relativeStandardError: null, vif: null });
     expect(JSON.stringify(answer)).not.toMatch(/NaN|Infinity/);
@@ -107,9 +122,8 @@ describe('evaluation', () => {
   it('shows how left-out squares shift the estimates', () => {
     const runs = [...corners, { settings: { x1: 0, x2: 0 } }];
     const { aliasMatrix } = evaluateAnswer({ factors: plain(2), runs, model: 'interaction' });
-    expect(aliasMatrix!.aliased).toEqual(['x1^2', 'x2^2']);
-    expect(aliasMatrix!.matrix[0]![0]).toBeCloseTo(0.8, 12);
-    expect(aliasMatrix!.matrix[1]).toEqual([0, 0]);
+    expect(aliasMatrix!['intercept']!['x1^2']).toBeCloseTo(0.8, 12);
+    expect(aliasMatrix!['x1']).toEqual({ 'x1^2': 0, 'x2^2': 0 });
   });
 
   it('gives the curve of prediction variance, rising to the largest', () => {
@@ -138,5 +152,28 @@ describe('evaluation', () => {
     terms.forEach((name, j) => {
       if (!name.startsWith('block')) expect(Math.abs(matrix[block]![j]!), name).toBeLessThan(1e-9);
     });
+  });
+});
+
+describe('power', () => {
+  // Cohen (1992), A power primer, table 2; noncentral F by two independent programs
+  it.each(power.two_level_effect.entries)(
+    'N = $N, effect/σ = $effect_over_sigma: $power',
+    ({ N, df_error, effect_over_sigma, alpha, power: expected }) => {
+      // an orthogonal two-level design: the relative standard error of a coefficient is 1/√N
+      const [, x1] = termsOf(plain(1), 'linear');
+      const question = { effect: effect_over_sigma, sigma: 1, significance: alpha };
+      expect(powerOf(x1, 1 / Math.sqrt(N), df_error, question)).toBeCloseTo(expected, 8);
+    },
+  );
+
+  it('is given when effect and spread are, and never for what cannot be tested', () => {
+    const runs = [-1, -1, 1, 1].map((x1) => ({ settings: { x1 } }));
+    const of = (more: object) =>
+      evaluateAnswer({ factors: plain(1), runs, model: 'linear', ...more }).terms;
+    expect(of({}).map((term) => term.power)).toEqual([null, null]);
+    expect(of({ effect: 2, sigma: 1 })[0]!.power).toBeNull();
+    expect(of({ effect: 2, sigma: 1 })[1]!.power).toBeGreaterThan(0.2);
+    expect(of({ effect: 1e9, sigma: 1e-9 })[1]!.power).toBeCloseTo(1, 2);
   });
 });

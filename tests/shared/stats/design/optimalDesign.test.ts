@@ -2,14 +2,13 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { gainOf, oldRowOf, stateOfRows } from '@shared/stats/design/exchangeState';
 import { optimalDesign } from '@shared/stats/design/optimalDesign';
-import { makeRegion } from '@shared/stats/design/region';
+import { makeRegion } from '@shared/stats/design/designRegion';
 import { regionMoments } from '@shared/stats/design/regionMoments';
 import { settableLattice } from '@shared/stats/design/settableLattice';
 import { compileRow } from '@shared/stats/model/compileRow';
 import { modelMatrix } from '@shared/stats/model/modelMatrix';
 import { termsOf } from '@shared/stats/model/term';
-import { makeRandom } from '@shared/stats/random/generator';
-import { normal } from '@shared/stats/random/normal';
+import { seeded } from '@shared/stats/random/random';
 
 const factors = [
   { key: 'a', low: 0, high: 10, step: 1 },
@@ -42,7 +41,7 @@ describe('exchange', () => {
               free,
               support: [],
             },
-            makeRandom(seed),
+            seeded(seed, 'test'),
           );
           expect(design.value).toBeGreaterThanOrEqual(design.startValue);
           for (const { point } of design.points) {
@@ -58,11 +57,11 @@ describe('exchange', () => {
   });
 
   it.each(['D', 'I'] as const)('knows the gain of a change in %s beforehand', (criterion) => {
-    const random = makeRandom(5);
+    const random = seeded(5, 'test');
     const rows = Array.from({ length: 9 }, () =>
-      Float64Array.from({ length: 6 }, () => normal(random)),
+      Float64Array.from({ length: 6 }, () => random.normal()),
     );
-    const next = Float64Array.from({ length: 6 }, () => normal(random));
+    const next = Float64Array.from({ length: 6 }, () => random.normal());
     const before = stateOfRows(rows, criterion, moments)!;
     const gain = gainOf(before, oldRowOf(before, rows[3]!), next);
     const after = stateOfRows(rows.with(3, next), criterion, moments)!;

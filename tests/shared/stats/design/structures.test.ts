@@ -17,12 +17,12 @@ import { plackettBurman } from '@shared/stats/design/plackettBurman';
 import { threeLevelDesign } from '@shared/stats/design/threeLevel';
 import { foldOver, fractionRuns, twoLevelDesign } from '@shared/stats/design/twoLevel';
 import { StatsError } from '@shared/stats/errors';
-import boxBehnkenReference from '../../../reference/data/struct_box_behnken.json';
-import blocking from '../../../reference/data/struct_factorial_blocking.json';
-import composite from '../../../reference/data/struct_ccd.json';
-import conference from '../../../reference/data/struct_conference_dsd.json';
-import fractions from '../../../reference/data/struct_fractional_factorials.json';
-import screening from '../../../reference/data/struct_plackett_burman.json';
+import boxBehnkenReference from '../../../reference/data/published/struct_box_behnken.json' with { type: 'json' };
+import blocking from '../../../reference/data/published/struct_factorial_blocking.json' with { type: 'json' };
+import composite from '../../../reference/data/published/struct_ccd.json' with { type: 'json' };
+import conference from '../../../reference/data/published/struct_conference_dsd.json' with { type: 'json' };
+import fractions from '../../../reference/data/published/struct_fractional_factorials.json' with { type: 'json' };
+import screening from '../../../reference/data/published/struct_plackett_burman.json' with { type: 'json' };
 
 const ROMAN: Record<string, number> = { III: 3, IV: 4, V: 5, VI: 6, VII: 7 };
 const dot = (a: readonly number[], b: readonly number[]) =>
