@@ -1,9 +1,11 @@
+import { sumOf } from '../comminution/decimal';
 import { balanceOf } from '../comminution/sieve/balance';
 import { passingAt, passingCurve, sizeAt, type CurvePoint } from '../comminution/sieve/curve';
 import { shapeIssues } from '../comminution/sieve/shape';
 import { gaudinSchuhmann, rosinRammler } from '../comminution/sieve/sizeLaw';
-import type { SieveAnswer, SieveRequest } from '../schemas/calc/sieve';
+import type { BalanceAnswer, SieveAnswer, SieveRequest } from '../schemas/calc/sieve';
 
+type Reading = number | null;
 type Warning = SieveAnswer['warnings'][number];
 
 /** What the engine needs of a request; limits and basis have their defaults. */
@@ -38,30 +40,48 @@ function outside(curve: readonly CurvePoint[], what: string): Warning {
   };
 }
 
+/** A gain beyond the limits has another cause than a loss: it is told apart. */
+function gains({ treatment, sieving, overall }: SieveAnswer['balance']): Warning[] {
+  const told = (balance: BalanceAnswer | null, what: string): Warning[] =>
+    !balance || balance.lossG >= 0 || balance.verdict === 'holds'
+      ? []
+      : [
+          {
+            code: 'gain',
+            message: `${what} by ${-balance.lossG} g: damp, a tare, or a mass in the wrong row.`,
+          },
+        ];
+  if (!treatment) return told(overall, 'Sieves and pan together outweigh the feed');
+  return [
+    ...told(treatment, 'The product before sieving outweighs the feed'),
+    ...told(sieving, 'Sieves and pan together outweigh the product before sieving'),
+  ];
+}
+
 /** Size distribution, balances and shape of one sieving: `POST /api/calc/sieve`. */
 export function sieveAnswer(input: SieveInput): SieveAnswer {
   const { sieves, panG, interpolation } = input;
   const rows = [...sieves].sort((a, b) => b.apertureMm - a.apertureMm);
-  const recoveredG = rows.reduce((sum, { retainedG }) => sum + retainedG, panG);
+  const recoveredG = sumOf([...rows.map(({ retainedG }) => retainedG), panG]);
   const curve = passingCurve(rows, panG);
+  const balance = balances(input, recoveredG);
   const warnings: Warning[] = [];
   if (recoveredG === 0)
     warnings.push({
       code: 'nothing-recovered',
       message: 'No mass on any sieve or in the pan: there is no distribution.',
     });
-  const passing: Record<string, number | null> = {};
-  const percentiles: Record<string, number | null> = {};
+  const readAt = (asked: readonly number[], read: (what: number) => Reading) => {
+    const values = asked.map((what) => [String(what), recoveredG > 0 ? read(what) : null] as const);
+    return Object.fromEntries(values);
+  };
+  const passing = readAt(input.passingAt, (size) => passingAt(curve, size, interpolation));
+  const percentiles = readAt(input.percentiles, (percent) => sizeAt(curve, percent, interpolation));
   if (recoveredG > 0) {
-    for (const size of input.passingAt) {
-      passing[String(size)] = passingAt(curve, size, interpolation);
-      if (passing[String(size)] === null) warnings.push(outside(curve, `${size} mm`));
-    }
-    for (const percent of input.percentiles) {
-      percentiles[String(percent)] = sizeAt(curve, percent, interpolation);
-      if (percentiles[String(percent)] === null)
-        warnings.push(outside(curve, `The size that ${percent} % passes`));
-    }
+    for (const [size, value] of Object.entries(passing))
+      if (value === null) warnings.push(outside(curve, `${size} mm`));
+    for (const [percent, value] of Object.entries(percentiles))
+      if (value === null) warnings.push(outside(curve, `The size that ${percent} % passes`));
   }
   return {
     table: curve.map(({ sizeMm, passingPercent }, i) => ({
@@ -73,10 +93,10 @@ export function sieveAnswer(input: SieveInput): SieveAnswer {
     percentiles,
     interpolation,
     recoveredG,
-    balance: balances(input, recoveredG),
+    balance,
     shape: shapeIssues(rows, panG),
     rosinRammler: rosinRammler(curve),
     gaudinSchuhmann: gaudinSchuhmann(curve),
-    warnings,
+    warnings: [...warnings, ...gains(balance)],
   };
 }

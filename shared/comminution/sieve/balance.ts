@@ -1,3 +1,5 @@
+import { differenceOf } from '../decimal';
+
 export interface Balance {
   readonly lossG: number;
   readonly lossPercent: number;
@@ -19,7 +21,7 @@ export function balanceOf(
   outG: number,
   limits: { readonly warn: number; readonly repeat: number },
 ): Balance {
-  const lossG = inG - outG;
+  const lossG = differenceOf(inG, outG);
   const lossPercent = (100 * lossG) / inG;
   const size = Math.abs(lossPercent) - SLACK_PERCENT;
   const verdict = size > limits.repeat ? 'repeat' : size > limits.warn ? 'warn' : 'holds';

@@ -1,3 +1,5 @@
+import { sumOf } from '../decimal';
+
 /** One sieve of a stack, with the mass that stayed on it. */
 export interface SieveRow {
   readonly apertureMm: number;
@@ -27,7 +29,7 @@ export function passingCurve(sieves: readonly SieveRow[], panG: number): CurvePo
   let passed = panG;
   for (const { retainedG } of [...rows].reverse()) {
     below.unshift(passed);
-    passed += retainedG;
+    passed = sumOf([passed, retainedG]);
   }
   return rows.map(({ apertureMm }, i) => ({
     sizeMm: apertureMm,
