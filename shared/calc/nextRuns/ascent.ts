@@ -1,5 +1,10 @@
 import { fromCoded } from '../../stats/coding/code';
-import { keeps, readConstraint, valuesOf } from '../../stats/coding/constraint';
+import {
+  keeps,
+  readConstraint,
+  valuesOf,
+  type ReadConstraint,
+} from '../../stats/coding/constraint';
 import {
   envelopeOf,
   isCategorical,
@@ -18,6 +23,25 @@ function gradientOf({ model }: NextBasis): number[] {
     const j = predictor.terms.findIndex((term) => order(term) === 1 && term.powers[i] === 1);
     return j < 0 ? 0 : predictor.coefficients[j]!;
   });
+}
+
+const isSame = (a: Settings, b: Settings) =>
+  Object.entries(a).every(([key, value]) => b[key] === value);
+
+/** What ends the path at these settings, or nothing. */
+function limitAt(
+  factors: readonly NumericFactor[],
+  limits: readonly ReadConstraint[],
+  at: Settings,
+): string {
+  const outside = factors.find((factor) => {
+    const { min, max } = envelopeOf(factor);
+    const value = Number(at[factor.key]);
+    return value < min - 1e-9 || value > max + 1e-9;
+  });
+  if (outside) return `the rig’s limit for ${outside.key}`;
+  const values = valuesOf(factors, at);
+  return limits.every((limit) => keeps(limit, values)) ? '' : 'a limit of the rig';
 }
 
 /**
@@ -44,22 +68,17 @@ export function ascent(basis: NextBasis): NextRuns {
   const limits = constraints.map((constraint) => readConstraint(factors, constraint));
   const settings: Settings[] = [];
   let stopped = '';
-  for (let i = 1; settings.length < count && stopped === ''; i++) {
+  for (let i = 1; settings.length < count; i++) {
     const at: Settings = Object.fromEntries(
       numeric.map((factor, f) => [
         factor.key,
         snap(factor, Number(fromCoded(factor, i * step * direction[f]!).toPrecision(12))),
       ]),
     );
-    const outside = numeric.find((factor) => {
-      const { min, max } = envelopeOf(factor);
-      const value = at[factor.key] as number; // made just above
-      return value < min - 1e-9 || value > max + 1e-9;
-    });
-    if (outside) stopped = `the rig’s limit for ${outside.key}`;
-    else if (!limits.every((limit) => keeps(limit, valuesOf(factors, at))))
-      stopped = 'a limit of the rig';
-    else settings.push(at);
+    stopped = limitAt(numeric, limits, at);
+    if (stopped !== '') break;
+    // steps wider than the stride leave a setting as it was: it is not run twice
+    if (!settings.some((other) => isSame(other, at))) settings.push(at);
   }
   if (settings.length === 0)
     throw new StatsError(

@@ -1,26 +1,28 @@
-import { walkLattice } from '../../stats/choice/latticeModels';
-import { TopList } from '../../stats/choice/topList';
 import type { Settings } from '../../stats/coding/factor';
-import { regionOf } from '../../stats/design/region';
+import { bestSettable } from '../../stats/design/climbLattice';
+import { makeRegion } from '../../stats/design/designRegion';
+import { settableLattice } from '../../stats/design/settableLattice';
+import { settle } from '../../stats/design/settle';
 import { StatsError } from '../../stats/errors';
-import { predictAt } from '../../stats/fit/predict';
-import { transformed } from '../../stats/fit/transform';
-import { settingsAt, type NextBasis, type NextRuns } from './basis';
+import { meanOfRow, predictAt, rowAt } from '../../stats/fit/predict';
+import { seeded } from '../../stats/random/random';
+import type { NextBasis, NextRuns } from './basis';
+import { scoreFor } from './improve';
 
 /** The best predicted settable setting. */
-function bestSetting({ request, model }: NextBasis): Settings {
-  const { factors, constraints, region, aim, target } = request;
-  const { transform } = model.predictor;
-  const wanted = target === undefined ? 0 : transformed(transform, target);
-  const top = new TopList<Float64Array>(1);
-  walkLattice(regionOf(factors, constraints, region), [model.predictor], ({ values, means }) => {
-    const mean = means[0]!;
-    const score = aim === 'maximise' ? mean : aim === 'minimise' ? -mean : -Math.abs(mean - wanted);
-    top.offer(score, () => values.slice());
-  });
-  const [best] = top.sorted();
+function bestSetting(basis: NextBasis): Settings {
+  const { factors, constraints, region: kind, seed } = basis.request;
+  const { predictor } = basis.model;
+  const score = scoreFor(basis);
+  const region = makeRegion(factors, constraints, kind);
+  const [best] = bestSettable(
+    region,
+    settableLattice(region),
+    (point) => score(meanOfRow(predictor, rowAt(predictor, point))),
+    seeded(seed, 'confirm'),
+  );
   if (!best) throw new StatsError('no-feasible-point', 'The limits leave no settable combination.');
-  return settingsAt(factors, best.item);
+  return settle(factors, best.point, true).settings;
 }
 
 const figure = (value: number | null) =>

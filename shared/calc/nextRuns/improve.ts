@@ -1,17 +1,37 @@
-import { walkLattice } from '../../stats/choice/latticeModels';
-import { TopList } from '../../stats/choice/topList';
-import { toCoded } from '../../stats/coding/code';
-import { isCategorical } from '../../stats/coding/factor';
-import { regionOf } from '../../stats/design/region';
+import { bestSettable, type ScoredPoint } from '../../stats/design/climbLattice';
+import { makeRegion } from '../../stats/design/designRegion';
+import { settableLattice } from '../../stats/design/settableLattice';
+import { settle } from '../../stats/design/settle';
 import { normalTails } from '../../stats/distributions/tails';
-import { leverageOfRow, rowAt } from '../../stats/fit/predict';
+import { leverageOfRow, meanOfRow, rowAt } from '../../stats/fit/predict';
 import { restored, transformed } from '../../stats/fit/transform';
-import { settingsAt, type NextBasis, type NextRuns } from './basis';
+import { seeded } from '../../stats/random/random';
+import type { NextBasis, NextRuns } from './basis';
 
 const density = (z: number) => Math.exp((-z * z) / 2) / Math.sqrt(2 * Math.PI);
 /** Settings nearer than this in coded units teach the same. */
 const APART = 0.35;
-const POOL = 400;
+
+/** How far a mean lies on the better side, for an aim; larger is better. */
+export function scoreFor({ request, model }: NextBasis): (mean: number) => number {
+  const { aim, target } = request;
+  const wanted = target === undefined ? 0 : transformed(model.predictor.transform, target);
+  if (aim === 'maximise') return (mean) => mean;
+  return aim === 'minimise' ? (mean) => -mean : (mean) => -Math.abs(mean - wanted);
+}
+
+/** The best first, then each next one that is not next to those taken; near ones only to fill up. */
+function apart(ranked: readonly ScoredPoint[], count: number): ScoredPoint[] {
+  const chosen: ScoredPoint[] = [];
+  for (const each of ranked) {
+    if (chosen.length === count) break;
+    const distance = (other: ScoredPoint) =>
+      Math.hypot(...other.point.map((x, i) => x - each.point[i]!));
+    if (chosen.every((other) => distance(other) >= APART)) chosen.push(each);
+  }
+  const rest = ranked.filter((each) => !chosen.includes(each));
+  return [...chosen, ...rest.slice(0, count - chosen.length)];
+}
 
 /**
  * Settings where the expected improvement over the best run so far is largest, apart from each other.
@@ -21,44 +41,27 @@ const POOL = 400;
  */
 export function improve(basis: NextBasis): NextRuns {
   const { request, model } = basis;
-  const { factors, constraints, region: kind, count, aim, target } = request;
+  const { factors, constraints, count, aim, seed } = request;
   const { predictor, fit } = model;
   const sd = predictor.residualSd ?? 0;
-  const wanted = target === undefined ? 0 : transformed(predictor.transform, target);
-  const score = (mean: number) =>
-    aim === 'maximise' ? mean : aim === 'minimise' ? -mean : -Math.abs(mean - wanted);
+  const score = scoreFor(basis);
   const best = Math.max(...fit.fitted.map(score));
-  const pool = new TopList<{ values: Float64Array; coded: number[] }>(POOL);
-  walkLattice(regionOf(factors, constraints, kind), [predictor], ({ values, means }) => {
-    const coded = factors.map((factor, i) =>
-      isCategorical(factor) ? values[i]! : toCoded(factor, values[i]!),
-    );
-    const spread = sd * Math.sqrt(Math.max(0, leverageOfRow(predictor, rowAt(predictor, coded))));
-    const ahead = score(means[0]!) - best;
-    const z = spread > 0 ? ahead / spread : ahead > 0 ? Infinity : -Infinity;
-    const gain =
-      spread > 0 ? ahead * normalTails(z).lower + spread * density(z) : Math.max(0, ahead);
-    pool.offer(gain, () => ({ values: values.slice(), coded }));
-  });
-  const chosen: { values: Float64Array; coded: number[] }[] = [];
-  const sorted = pool.sorted();
-  for (const { item } of sorted) {
-    const isApart = chosen.every(
-      (other) => Math.hypot(...other.coded.map((x, i) => x - item.coded[i]!)) >= APART,
-    );
-    if (isApart) chosen.push(item);
-    if (chosen.length === count) break;
-  }
-  for (const { item } of sorted) {
-    if (chosen.length >= count) break;
-    if (!chosen.includes(item)) chosen.push(item);
-  }
-  const first = sorted[0]?.score ?? 0;
+  const improvement = (point: readonly number[]) => {
+    const row = rowAt(predictor, point);
+    const spread = sd * Math.sqrt(Math.max(0, leverageOfRow(predictor, row)));
+    const ahead = score(meanOfRow(predictor, row)) - best;
+    if (spread <= 0) return Math.max(0, ahead);
+    const z = ahead / spread;
+    return ahead * normalTails(z).lower + spread * density(z);
+  };
+  const region = makeRegion(factors, constraints, request.region);
+  const random = seeded(seed, 'improve');
+  const ranked = bestSettable(region, settableLattice(region), improvement, random);
   return {
-    settings: chosen.map(({ values }) => settingsAt(factors, values)),
+    settings: apart(ranked, count).map(({ point }) => settle(factors, point, true).settings),
     why: 'Here the model expects most to be gained on the best run so far, or knows too little to rule it out.',
     gain: {
-      expectedImprovement: first,
+      expectedImprovement: ranked[0]?.score ?? 0,
       predictedFirst: restored(predictor.transform, aim === 'minimise' ? -best : best),
     },
     warnings: [],
