@@ -28,6 +28,9 @@ function gradientOf({ model }: NextBasis): number[] {
 const isSame = (a: Settings, b: Settings) =>
   Object.entries(a).every(([key, value]) => b[key] === value);
 
+/** Strides tried before a path that hardly moves is given up. */
+const MAX_STRIDES = 2000;
+
 /** What ends the path at these settings, or nothing. */
 function limitAt(
   factors: readonly NumericFactor[],
@@ -42,6 +45,35 @@ function limitAt(
   if (outside) return `the rig’s limit for ${outside.key}`;
   const values = valuesOf(factors, at);
   return limits.every((limit) => keeps(limit, values)) ? '' : 'a limit of the rig';
+}
+
+interface Path {
+  readonly direction: readonly number[];
+  readonly step: number;
+  readonly count: number;
+}
+
+/** Settable settings along a direction from the centre, as far as the limits allow. */
+function walk(
+  factors: readonly NumericFactor[],
+  limits: readonly ReadConstraint[],
+  { direction, step, count }: Path,
+): { settings: Settings[]; stopped: string } {
+  const settings: Settings[] = [];
+  for (let i = 1; settings.length < count; i++) {
+    if (i > MAX_STRIDES) return { settings, stopped: 'strides far shorter than the steps' };
+    const at: Settings = Object.fromEntries(
+      factors.map((factor, f) => [
+        factor.key,
+        snap(factor, Number(fromCoded(factor, i * step * direction[f]!).toPrecision(12))),
+      ]),
+    );
+    const stopped = limitAt(factors, limits, at);
+    if (stopped !== '') return { settings, stopped };
+    // steps wider than the stride leave a setting as it was: it is not run twice
+    if (!settings.some((other) => isSame(other, at))) settings.push(at);
+  }
+  return { settings, stopped: '' };
 }
 
 /**
@@ -66,20 +98,7 @@ export function ascent(basis: NextBasis): NextRuns {
   const sign = aim === 'minimise' ? -1 : 1;
   const direction = gradient.map((slope) => (sign * slope) / largest);
   const limits = constraints.map((constraint) => readConstraint(factors, constraint));
-  const settings: Settings[] = [];
-  let stopped = '';
-  for (let i = 1; settings.length < count; i++) {
-    const at: Settings = Object.fromEntries(
-      numeric.map((factor, f) => [
-        factor.key,
-        snap(factor, Number(fromCoded(factor, i * step * direction[f]!).toPrecision(12))),
-      ]),
-    );
-    stopped = limitAt(numeric, limits, at);
-    if (stopped !== '') break;
-    // steps wider than the stride leave a setting as it was: it is not run twice
-    if (!settings.some((other) => isSame(other, at))) settings.push(at);
-  }
+  const { settings, stopped } = walk(numeric, limits, { direction, step, count });
   if (settings.length === 0)
     throw new StatsError(
       'no-feasible-point',
