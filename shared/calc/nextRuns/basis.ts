@@ -1,6 +1,7 @@
 import type { NextAnswer, NextRequest } from '../../schemas/calc/next';
 import { toCoded } from '../../stats/coding/code';
 import { isCategorical, type Factor, type Settings } from '../../stats/coding/factor';
+import { StatsError } from '../../stats/errors';
 import { fitModel, type FittedModel } from '../../stats/fit/fitModel';
 import { predictPoint } from '../../stats/fit/predict';
 import { pointOf } from '../../stats/model/modelMatrix';
@@ -17,7 +18,14 @@ export type NextRuns = Omit<NextAnswer, 'runs'> & { readonly settings: readonly 
 
 export function basisOf(request: NextRequest): NextBasis {
   const { used } = usedRuns(request.runs);
-  return { request, model: fitModel(request, used), used };
+  const model = fitModel(request, used);
+  const { coefficients, residualSd } = model.predictor;
+  if (!coefficients.every(Number.isFinite) || Number.isNaN(residualSd ?? 0))
+    throw new StatsError(
+      'not-finite',
+      'These numbers are too extreme to compute with: the fitted model came out infinite or undefined.',
+    );
+  return { request, model, used };
 }
 
 export function settingsAt(factors: readonly Factor[], values: ArrayLike<number>): Settings {

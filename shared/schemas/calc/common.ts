@@ -32,8 +32,12 @@ interface NumericShape {
   high: number;
   min?: number | undefined;
   max?: number | undefined;
+  step?: number | undefined;
   scale?: 'linear' | 'log' | undefined;
 }
+
+/** A dial with more positions is set freely: leave the step out. */
+const MAX_POSITIONS = 100_000;
 
 function checkRange(factor: NumericShape, issue: (path: string, message: string) => void): void {
   const { low, high, min = low, max = high } = factor;
@@ -44,6 +48,11 @@ function checkRange(factor: NumericShape, issue: (path: string, message: string)
       `Low and high are both ${low}, so this factor cannot change. Hold it fixed instead.`,
     );
   if (min > max) issue('min', `The envelope runs from ${min} to ${max}: its ends are reversed.`);
+  if (factor.step !== undefined && (max - min) / factor.step > MAX_POSITIONS)
+    issue(
+      'step',
+      `A step of ${factor.step} makes more than ${MAX_POSITIONS} settable values. Leave it out for a factor that is set freely.`,
+    );
   if (factor.scale === 'log' && Math.min(low, min) <= 0)
     issue('low', 'On a log scale every value must be above 0.');
 }

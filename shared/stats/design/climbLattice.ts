@@ -28,7 +28,8 @@ function climb({ region, levels }: SettableLattice, start: ScoredPoint, score: S
   const offer = (point: readonly number[]): boolean => {
     if (!region.isFeasible(point)) return false;
     const value = score(point);
-    if (value <= best.score) return false;
+    // also false for a score that is no number
+    if (!(value > best.score)) return false;
     best = { point, score: value };
     return true;
   };

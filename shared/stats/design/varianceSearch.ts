@@ -150,7 +150,7 @@ export function climb(task: VarianceTask, start: readonly number[], random: Rand
         if (!region.isFeasible(point)) point = edgeBetween(region, best.point, point);
       }
       const value = valueAt(point);
-      if (value <= best.value) continue;
+      if (!(value > best.value)) continue;
       best = { point, value };
       isBetter = true;
     }

@@ -41,7 +41,8 @@ export function deviance(x: number, m: number): number {
   for (let k = 1; ; k++) {
     term *= v * v;
     const next = sum + term / (2 * k + 1);
-    if (next === sum) return sum;
+    // a NaN never equals itself: it goes through, the caller refuses it
+    if (next === sum || Number.isNaN(next)) return next;
     sum = next;
   }
 }
