@@ -1,6 +1,6 @@
 import { StatsError } from '../stats/errors';
 
-export const MAX_FACTORS = 12;
+const MAX_FACTORS = 12;
 export const MAX_RUNS = 2000;
 
 /** @throws StatsError `too-many-factors` above twelve. */

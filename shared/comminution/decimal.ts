@@ -2,7 +2,7 @@
 const DIGITS = 12;
 
 /** A number without binary dust, for sums and differences of readings in one unit. */
-export function withoutDust(value: number): number {
+function withoutDust(value: number): number {
   return Number(value.toPrecision(DIGITS));
 }
 

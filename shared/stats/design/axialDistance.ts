@@ -1,14 +1,7 @@
 import { StatsError } from '../errors';
 
-export const ALPHA_RULES = [
-  'rotatable',
-  'faceCentred',
-  'spherical',
-  'orthogonal',
-  'orthogonalBlocks',
-  'fourthRoot',
-] as const;
-export type AlphaRule = (typeof ALPHA_RULES)[number];
+export type AlphaRule =
+  'rotatable' | 'faceCentred' | 'spherical' | 'orthogonal' | 'orthogonalBlocks' | 'fourthRoot';
 
 /** Numbers of runs of a central composite design. */
 export interface CompositeCounts {

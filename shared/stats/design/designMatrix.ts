@@ -30,7 +30,7 @@ export function blockColumns(blocks: readonly number[]): { names: string[]; rows
 }
 
 /** The columns of one matrix, then those of rows. */
-export function withColumns(x: Matrix, rows: readonly (readonly number[])[]): Matrix {
+function withColumns(x: Matrix, rows: readonly (readonly number[])[]): Matrix {
   const extra = rows[0]?.length ?? 0;
   const cols = x.cols + extra;
   const data = new Float64Array(x.rows * cols);

@@ -46,7 +46,7 @@ const BLOCKS_28: readonly (readonly string[])[] = [
   ],
 ];
 
-export const PLACKETT_BURMAN_RUNS = [8, 12, 16, 20, 24, 28] as const;
+const PLACKETT_BURMAN_RUNS = [8, 12, 16, 20, 24, 28] as const;
 
 const signs = (text: string) => Array.from(text).map((sign) => (sign === '+' ? 1 : -1));
 

@@ -52,7 +52,7 @@ const figure = (value: Setting) =>
   typeof value === 'number' ? String(Number(value.toPrecision(5))) : value;
 
 /** Settings in words: `voltage 213 kV, gap 25 mm`. */
-export function describeSettings(
+function describeSettings(
   factors: readonly Factor[],
   settings: Readonly<Record<string, Setting>>,
 ): string {

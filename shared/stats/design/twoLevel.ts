@@ -5,7 +5,7 @@ import { closureOf, letters, type EffectWord } from './effectWord';
 import { wordOf, type Generator } from './fractionGenerators';
 
 /** b for 2^b blocks. */
-export function powerOfTwo(blocks: number): number {
+function powerOfTwo(blocks: number): number {
   const power = Math.round(Math.log2(blocks));
   if (2 ** power === blocks) return power;
   throw new StatsError(

@@ -53,7 +53,7 @@ function dot(rows: Float64Array, i: number, v: Float64Array): number {
 }
 
 /** The state of a design; null when its information matrix is singular. */
-export function stateOf(design: WeightedDesign): WeightedState | null {
+function stateOf(design: WeightedDesign): WeightedState | null {
   const { p, rows, weights } = design;
   const l = cholesky(informationOf(design), p);
   if (!l) return null;
