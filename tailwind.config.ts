@@ -63,6 +63,7 @@ export default {
     extend: {
       gridTemplateColumns: {
         'main-aside': 'minmax(0, 1fr) minmax(0, 476px)',
+        'main-action': 'minmax(0, 1fr) auto',
         'main-side': 'minmax(0, 1fr) 344px',
         'page-header': 'minmax(260px, 424px) minmax(0, 1fr) auto',
         mark: '20px minmax(0, 1fr)',
