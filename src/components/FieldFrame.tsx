@@ -55,7 +55,7 @@ export function FieldFrame(props: FieldFrameProps) {
   const { id, label, hint, error, caution, children, className } = props;
   const ids = fieldIds(id);
   return (
-    <div className={classes('grid min-w-0 content-start gap-1', className)}>
+    <div className={classes('grid min-w-0 grid-cols-1 content-start gap-1', className)}>
       <label htmlFor={id} className="text-2 text-ink-2">
         {label}
       </label>

@@ -15,12 +15,12 @@ export function PageHeader({ title, facts, stages, action }: PageHeaderProps) {
   return (
     <header className="border-b border-line bg-paper px-4 py-3 sm:px-6 lg:px-8">
       <div className="grid min-h-12 items-center gap-x-8 gap-y-3 sm:grid-cols-main-action lg:grid-cols-page-header">
-        <div className="min-w-0">
+        <div className="min-w-0 sm:col-start-1 sm:row-start-1">
           <h1 className="text-5 font-mark">{title}</h1>
           {facts && <p className="text-2 text-balance text-ink-3 lg:truncate">{facts}</p>}
         </div>
         {stages && (
-          <div className="min-w-0 sm:col-span-2 sm:row-start-2 lg:col-span-1 lg:row-start-1">
+          <div className="min-w-0 sm:col-span-2 sm:row-start-2 lg:col-span-1 lg:col-start-2 lg:row-start-1">
             <StageLine stages={stages} />
           </div>
         )}
