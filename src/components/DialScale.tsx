@@ -12,12 +12,14 @@ export interface DialRange {
 const BASE = 12;
 const MOST_TICKS = 24;
 
-const MULTIPLES = [1, 2, 5, 10, 20, 50, 100, 200, 500, 1000, 2000, 5000, 10_000];
+const MULTIPLES = [1, 2, 3, 4, 5, 10, 15, 20, 25, 30, 50, 100, 200, 500, 1000, 2000, 5000, 10_000];
 
-/** A round number of steps that leaves at most so many gaps between ticks. */
+/** A round number of steps between two ticks: few enough gaps, and the last tick on the end if it can be. */
 function tickStep({ min, max, step }: DialRange, mostGaps: number): number {
-  const fitting = MULTIPLES.find((multiple) => (max - min) / (step * multiple) <= mostGaps);
-  return fitting === undefined ? max - min : step * fitting;
+  const steps = (max - min) / step;
+  const fitting = MULTIPLES.filter((multiple) => steps / multiple <= mostGaps);
+  const even = fitting.find((multiple) => Math.abs(steps % multiple) < 1e-6);
+  return step * (even ?? fitting[0] ?? steps);
 }
 
 function ticks(range: DialRange, mostGaps: number): number[] {

@@ -1,8 +1,7 @@
 import { GoalMark, type GoalSide, type GoalState } from '../GoalMark';
+import { GoalRow } from '../GoalRow';
 import { HundredSquares, type Outcome } from '../HundredSquares';
-import { IntervalBar } from '../IntervalBar';
 import { LedgerBar } from '../LedgerBar';
-import { NumberWithInterval } from '../NumberWithInterval';
 import { Panel } from '../Panel';
 import { RunRing } from '../RunRing';
 import { SignatureBlock } from '../SignatureBlock';
@@ -39,81 +38,44 @@ function Marks() {
   );
 }
 
-const GOALS = [
-  {
-    name: 'Passing 2 mm',
-    unit: '%',
-    side: 'atLeast',
-    limit: 80,
-    state: 'holds',
-    scale: { low: 70, high: 95 },
-    value: 84.6,
-    digits: 1,
-    mean: { low: 83.2, high: 86 },
-    single: { low: 80.1, high: 89 },
-  },
-  {
-    name: 'Dust < 0.125 mm',
-    unit: '%',
-    side: 'atMost',
-    limit: 7,
-    state: 'touches',
-    scale: { low: 3, high: 10 },
-    value: 6.28,
-    digits: 2,
-    mean: { low: 6, high: 6.56 },
-    single: { low: 5.52, high: 7.04 },
-  },
-  {
-    name: 'Specific energy',
-    unit: 'kWh/t',
-    side: 'atMost',
-    limit: 18,
-    state: 'holds',
-    scale: { low: 5, high: 25 },
-    value: 14.5,
-    digits: 1,
-    mean: null,
-    single: null,
-  },
-] as const;
-
 function Goals() {
   return (
     <Panel name="Goals at this setting" fact="one new bag, 95 %">
-      <div className="grid">
-        {GOALS.map(({ name, unit, side, limit, state, scale, value, digits, mean, single }) => (
-          <div
-            key={name}
-            className="grid grid-cols-goal items-center gap-3 border-t border-line py-2 first:border-t-0"
-          >
-            <div>
-              {name}
-              <span className="block text-2 text-ink-3">
-                {side === 'atLeast' ? 'at least' : 'at most'} {limit}
-              </span>
-            </div>
-            <div className="text-right">
-              <NumberWithInterval
-                value={value}
-                unit={unit}
-                digits={digits}
-                interval={single}
-                instead="computed"
-                size="table"
-              />
-            </div>
-            <IntervalBar
-              scale={scale}
-              estimate={value}
-              mean={mean}
-              single={single}
-              limits={[{ value: limit, side }]}
-            />
-            <GoalMark side={side} state={state} />
-          </div>
-        ))}
-      </div>
+      <GoalRow
+        name="Passing 2 mm"
+        unit="%"
+        digits={1}
+        scale={{ low: 70, high: 95 }}
+        goal={{ side: 'atLeast', limits: [80] }}
+        prediction={{
+          value: 84.6,
+          mean: { low: 83.2, high: 86 },
+          single: { low: 80.1, high: 89 },
+        }}
+        state="holds"
+      />
+      <GoalRow
+        name="Dust < 0.125 mm"
+        unit="%"
+        digits={2}
+        scale={{ low: 3, high: 10 }}
+        goal={{ side: 'range', limits: [4, 7] }}
+        prediction={{
+          value: 6.28,
+          mean: { low: 6, high: 6.56 },
+          single: { low: 5.52, high: 7.04 },
+        }}
+        state="touches"
+      />
+      <GoalRow
+        name="Specific energy"
+        unit="kWh/t"
+        digits={1}
+        scale={{ low: 5, high: 25 }}
+        goal={{ side: 'atMost', limits: [18] }}
+        prediction={{ value: 14.5, mean: null, single: null }}
+        state="holds"
+      />
     </Panel>
   );
 }
