@@ -8,6 +8,7 @@ import { StageLine, type StageStop } from '../StageLine';
 import { ThemeSwitch } from '../ThemeSwitch';
 import { ActionParts } from './ActionParts';
 import { FormParts } from './FormParts';
+import { MapParts } from './MapParts';
 import { NumberParts } from './NumberParts';
 import { StateParts } from './StateParts';
 
@@ -46,6 +47,7 @@ export function Gallery() {
       />
       <main className="grid gap-4 p-4 sm:p-6 lg:px-8">
         <StageLine stages={STAGES} isLarge />
+        <MapParts />
         <FormParts />
         <ActionParts />
         <NumberParts />
