@@ -1,6 +1,8 @@
+import type { CustomSeriesOption } from 'echarts/charts';
 import type { EChartsCoreOption } from 'echarts/core';
 import { formatNumber } from '@/lib/format';
-import type { Domain } from './frame';
+import { layer, type Domain } from './frame';
+import { path } from './shapes';
 import { SANS, type ChartTokens } from './tokens';
 
 /** Width and height of the whole chart in pixels. */
@@ -34,8 +36,10 @@ interface PlotInput {
   readonly padding: Padding;
   readonly x: AxisInput;
   readonly y: AxisInput;
-  /** No line where values do not start at the axis. */
+  /** Level lines at the ticks of y; without them y has tick marks, as on the map. */
   readonly hasGridlines?: boolean;
+  /** What is drawn, from the ground up; see `layer`. */
+  readonly layers: readonly CustomSeriesOption[];
 }
 
 const common = (tokens: ChartTokens, { domain, ticks, format = formatNumber }: AxisInput) => ({
@@ -48,6 +52,7 @@ const common = (tokens: ChartTokens, { domain, ticks, format = formatNumber }: A
     color: tokens['ink-3'],
     fontFamily: SANS,
     fontSize: 12,
+    lineHeight: 16,
     hideOverlap: true,
     formatter: (value: number) => format(value),
   },
@@ -58,7 +63,8 @@ const common = (tokens: ChartTokens, { domain, ticks, format = formatNumber }: A
  * Grid and axes in the look: ticks outward, names at the far ends, horizontal gridlines only. The name
  * of the vertical axis stands level above it: nobody turns the head to read it.
  */
-export function plotOption({ tokens, padding, x, y, hasGridlines = true }: PlotInput) {
+export function plotOption(input: PlotInput): EChartsCoreOption {
+  const { tokens, padding, x, y, hasGridlines = true, layers } = input;
   const tick = (ticks: readonly number[]) => ({
     show: true,
     length: 5,
@@ -79,7 +85,7 @@ export function plotOption({ tokens, padding, x, y, hasGridlines = true }: PlotI
       nameTextStyle: {
         align: 'right',
         verticalAlign: 'top',
-        padding: [24, 0, 0, 0],
+        padding: [28, 0, 0, 0],
         color: tokens['ink-2'],
         fontSize: 12,
       },
@@ -87,12 +93,9 @@ export function plotOption({ tokens, padding, x, y, hasGridlines = true }: PlotI
     yAxis: {
       ...common(tokens, y),
       axisTick: hasGridlines ? { show: false } : tick(y.ticks),
-      splitLine: hasGridlines
-        ? { show: true, lineStyle: { color: tokens.line, width: 1 } }
-        : { show: false },
       name: y.name,
       nameLocation: 'end',
-      nameGap: 8,
+      nameGap: 12,
       nameTextStyle: {
         align: 'left',
         padding: [0, 0, 0, -padding.left],
@@ -100,5 +103,23 @@ export function plotOption({ tokens, padding, x, y, hasGridlines = true }: PlotI
         fontSize: 12,
       },
     },
-  } satisfies EChartsCoreOption;
+    series: [...(hasGridlines ? [gridlines(input)] : []), ...layers],
+  };
+}
+
+/** Level hairlines; the axis' own could not be told at which values to stand. */
+function gridlines({ tokens, x, y }: PlotInput): CustomSeriesOption {
+  return layer({
+    x: x.domain,
+    y: y.domain,
+    z: 0,
+    draw: (frame) =>
+      y.ticks.map((tick) => {
+        const height = Math.round(frame.at(0, tick)[1]) + 0.5;
+        return path(`M${frame.left} ${height}h${frame.width}`, {
+          stroke: tokens.line,
+          lineWidth: 1,
+        });
+      }),
+  });
 }

@@ -59,22 +59,20 @@ export function contourMapOption(
   const scene: Scene = { input, tokens, isNarrow: isNarrow(size) };
   const field = fieldOf(input);
   const domains = mapDomains(field);
-  return {
-    ...plotOption({
-      tokens,
-      padding: mapPadding(size),
-      hasGridlines: false,
-      x: {
-        name: axisName(input.x),
-        domain: domains.x,
-        ticks: thinned(roundTicks(field.x.low, field.x.high, 10), scene.isNarrow),
-      },
-      y: {
-        name: axisName(input.y),
-        domain: domains.y,
-        ticks: roundTicks(field.y.low, field.y.high, 6),
-      },
-    }),
-    series: [layer({ ...domains, draw: (frame) => drawAll(scene, field, frame) })],
-  };
+  return plotOption({
+    tokens,
+    padding: mapPadding(size),
+    hasGridlines: false,
+    x: {
+      name: axisName(input.x),
+      domain: domains.x,
+      ticks: thinned(roundTicks(field.x.low, field.x.high, 10), scene.isNarrow),
+    },
+    y: {
+      name: axisName(input.y),
+      domain: domains.y,
+      ticks: roundTicks(field.y.low, field.y.high, 6),
+    },
+    layers: [layer({ ...domains, draw: (frame) => drawAll(scene, field, frame) })],
+  });
 }

@@ -7,6 +7,7 @@ import { PracticeTag } from '../PracticeTag';
 import { StageLine, type StageStop } from '../StageLine';
 import { ThemeSwitch } from '../ThemeSwitch';
 import { ActionParts } from './ActionParts';
+import { ChartParts } from './ChartParts';
 import { FormParts } from './FormParts';
 import { MapParts } from './MapParts';
 import { NumberParts } from './NumberParts';
@@ -48,6 +49,7 @@ export function Gallery() {
       <main className="grid gap-4 p-4 sm:p-6 lg:px-8">
         <StageLine stages={STAGES} isLarge />
         <MapParts />
+        <ChartParts />
         <FormParts />
         <ActionParts />
         <NumberParts />
