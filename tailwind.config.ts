@@ -62,6 +62,7 @@ export default {
       'half-fill': token('half-fill'),
     },
     extend: {
+      maxHeight: { dialog: 'calc(100vh - 96px)' },
       gridTemplateColumns: {
         'main-aside': 'minmax(0, 1fr) minmax(0, 476px)',
         'main-action': 'minmax(0, 1fr) auto',

@@ -18,7 +18,7 @@ const VARIANTS = {
 
 const SIZES = {
   small: 'h-11 px-3 text-2 sm:h-7',
-  target: 'h-11 px-4 sm:h-9',
+  target: 'h-11 px-4 text-3 sm:h-9',
   bench: 'h-16 px-6 text-4',
   benchPrimary: 'h-24 w-full px-6 text-5',
 } as const;
@@ -26,7 +26,7 @@ const SIZES = {
 /** A quiet button stands in a line of text: no box, but its target on a phone. */
 const QUIET_SIZES = {
   small: 'text-2',
-  target: 'min-h-9 px-1',
+  target: 'min-h-9 px-1 text-3',
   bench: 'h-16 px-4 text-4',
   benchPrimary: 'h-24 px-6 text-5',
 } as const;
@@ -52,7 +52,7 @@ export function Button({
       {...(asChild ? {} : { type: 'button' })}
       {...rest}
       className={classes(
-        'inline-flex items-center justify-center gap-2 rounded text-3 font-mark whitespace-nowrap',
+        'inline-flex items-center justify-center gap-2 rounded font-mark whitespace-nowrap',
         'transition-colors disabled:cursor-not-allowed aria-disabled:cursor-not-allowed',
         variant === 'quiet' ? QUIET_SIZES[size] : SIZES[size],
         VARIANTS[variant],

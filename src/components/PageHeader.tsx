@@ -10,10 +10,10 @@ interface PageHeaderProps {
   readonly action?: ReactNode;
 }
 
-/** What this page is about, how far the study has come, and the next action. */
+/** Stands first inside main. What this page is about, how far the study has come, and the next action. */
 export function PageHeader({ title, facts, stages, action }: PageHeaderProps) {
   return (
-    <header className="border-b border-line bg-paper px-4 py-3 sm:px-6 lg:px-8">
+    <div className="border-b border-line bg-paper px-4 py-3 sm:px-6 lg:px-8">
       <div className="grid min-h-12 items-center gap-x-8 gap-y-3 sm:grid-cols-main-action lg:grid-cols-page-header">
         <div className="min-w-0 sm:col-start-1 sm:row-start-1">
           <h1 className="text-5 font-mark">{title}</h1>
@@ -28,6 +28,6 @@ export function PageHeader({ title, facts, stages, action }: PageHeaderProps) {
           <div className="grid sm:col-start-2 sm:row-start-1 sm:block lg:col-start-3">{action}</div>
         )}
       </div>
-    </header>
+    </div>
   );
 }

@@ -15,3 +15,6 @@ Object.assign(Element.prototype, {
   hasPointerCapture: () => false,
   scrollIntoView: () => undefined,
 });
+Object.assign(window, {
+  matchMedia: (query: string) => Object.assign(new EventTarget(), { matches: false, media: query }),
+});

@@ -40,20 +40,22 @@ export function Gallery() {
           items={[{ key: 'out', label: 'Sign out', onChosen: () => undefined }]}
         />
       </AppBar>
-      <PageHeader
-        title="Coarse sand from Quernby granite, little dust"
-        facts="TV-041 · feed 45–63 mm, bags of 300 g · Rig 2, envelope rev. 4"
-        stages={STAGES.map(({ name, state }) => ({ name, state }))}
-        action={<Button variant="primary">Record run 16</Button>}
-      />
-      <main className="grid gap-4 p-4 sm:p-6 lg:px-8">
-        <StageLine stages={STAGES} isLarge />
-        <MapParts />
-        <ChartParts />
-        <FormParts />
-        <ActionParts />
-        <NumberParts />
-        <StateParts />
+      <main>
+        <PageHeader
+          title="Coarse sand from Quernby granite, little dust"
+          facts="TV-041 · feed 45–63 mm, bags of 300 g · Rig 2, envelope rev. 4"
+          stages={STAGES.map(({ name, state }) => ({ name, state }))}
+          action={<Button variant="primary">Record run 16</Button>}
+        />
+        <div className="grid gap-4 p-4 sm:p-6 lg:px-8">
+          <StageLine stages={STAGES} isLarge />
+          <MapParts />
+          <ChartParts />
+          <FormParts />
+          <ActionParts />
+          <NumberParts />
+          <StateParts />
+        </div>
       </main>
     </>
   );
