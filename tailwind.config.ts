@@ -9,7 +9,7 @@ const pixels = (...sizes: readonly number[]) =>
 const type = (name: string, lead = name) =>
   [token(`text-${name}`), token(`lead-${lead}`)] as [string, string];
 
-const grounds = ['paper', 'surface', 'sunk', 'line', 'line-strong', 'veil'];
+const grounds = ['paper', 'surface', 'sunk', 'line', 'line-strong', 'veil', 'shade'];
 const inks = ['ink', 'ink-2', 'ink-3', 'focus', 'spark', 'spark-halo'];
 const accents = ['accent', 'accent-deep', 'accent-wash', 'on-accent'];
 const warnings = ['caution', 'caution-mark', 'caution-wash', 'on-caution', 'stop', 'stop-wash'];

@@ -20,7 +20,7 @@ export function Dialog(props: DialogProps) {
   return (
     <Layer.Root open={isOpen} onOpenChange={(open) => !open && onClosed()}>
       <Layer.Portal>
-        <Layer.Overlay className="fixed inset-0 z-40 bg-ink/40" />
+        <Layer.Overlay className="fixed inset-0 z-40 bg-shade" />
         <Layer.Content
           onOpenAutoFocus={() => {
             opener.current = document.activeElement;

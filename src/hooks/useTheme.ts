@@ -1,49 +1,27 @@
-import { useSyncExternalStore } from 'react';
+import { useEffect, useSyncExternalStore } from 'react';
+import {
+  chooseTheme,
+  onThemeChanged,
+  rememberedTheme,
+  restoreTheme,
+  showTheme,
+  shownTheme,
+} from '@/lib/theme';
 
-export type Theme = 'light' | 'dark';
+const BENCH = 'cragline.benchTheme';
 
-const KEY = 'cragline.theme';
-const listeners = new Set<() => void>();
-
-function systemTheme(): Theme {
-  return window.matchMedia('(prefers-color-scheme: dark)').matches ? 'dark' : 'light';
-}
-
-function storedTheme(): Theme | null {
-  const stored = localStorage.getItem(KEY);
-  return stored === 'light' || stored === 'dark' ? stored : null;
-}
-
-/** What the page shows: the chosen theme, else the system's. */
-function currentTheme(): Theme {
-  const set = document.documentElement.dataset['theme'];
-  return set === 'light' || set === 'dark' ? set : systemTheme();
-}
-
-function subscribe(listener: () => void) {
-  const query = window.matchMedia('(prefers-color-scheme: dark)');
-  listeners.add(listener);
-  query.addEventListener('change', listener);
-  return () => {
-    listeners.delete(listener);
-    query.removeEventListener('change', listener);
-  };
-}
-
-function switchTheme(theme: Theme): void {
-  localStorage.setItem(KEY, theme);
-  document.documentElement.dataset['theme'] = theme;
-  listeners.forEach((listener) => listener());
-}
-
-/** Puts the remembered choice on the document; called once, before the first render. */
-export function restoreTheme(): void {
-  const stored = storedTheme();
-  if (stored) document.documentElement.dataset['theme'] = stored;
-}
-
-/** The theme in force and how to change it. It is the browser's, not the person's: tablets are shared. */
+/** The theme in force and how to choose another. */
 export function useTheme() {
-  const theme = useSyncExternalStore(subscribe, currentTheme);
-  return { theme, switchTheme };
+  const theme = useSyncExternalStore(onThemeChanged, shownTheme);
+  return { theme, switchTheme: chooseTheme };
+}
+
+/** At the bench: dark unless somebody chose otherwise there. The other pages keep their own choice. */
+export function useBenchTheme() {
+  const theme = useSyncExternalStore(onThemeChanged, shownTheme);
+  useEffect(() => {
+    showTheme(rememberedTheme(BENCH) ?? 'dark');
+    return restoreTheme;
+  }, []);
+  return { theme, switchTheme: (chosen: typeof theme) => chooseTheme(chosen, BENCH) };
 }

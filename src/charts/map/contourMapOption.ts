@@ -39,7 +39,7 @@ function drawAll(scene: Scene, field: Field, frame: Frame) {
     bands(scene, field, frame),
     ...veil(scene, field, frame),
     ...contourLines(scene, field, frame, obstacles),
-    ...edges(scene, field, frame),
+    ...edges({ scene, field, frame, obstacles }),
     ...sectionMark(scene, frame),
     ...runs(scene, frame),
     ...setPointMark(scene, frame),

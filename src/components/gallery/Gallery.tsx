@@ -7,6 +7,7 @@ import { PracticeTag } from '../PracticeTag';
 import { StageLine, type StageStop } from '../StageLine';
 import { ThemeSwitch } from '../ThemeSwitch';
 import { ActionParts } from './ActionParts';
+import { BenchParts } from './BenchParts';
 import { ChartParts } from './ChartParts';
 import { FormParts } from './FormParts';
 import { MapParts } from './MapParts';
@@ -54,6 +55,7 @@ export function Gallery() {
           <FormParts />
           <ActionParts />
           <NumberParts />
+          <BenchParts />
           <StateParts />
         </div>
       </main>
