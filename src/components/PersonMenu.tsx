@@ -32,7 +32,7 @@ export function PersonMenu({ name, role, items }: PersonMenuProps) {
       trigger={
         <button
           type="button"
-          aria-label={`Signed in as ${name}`}
+          aria-label={`${initialsOf(name)}, signed in as ${name}`}
           className="grid size-9 flex-none place-items-center"
         >
           <span className="grid size-7 place-items-center rounded-round border border-line-strong text-label font-mark">

@@ -67,7 +67,6 @@ export function TermCell({ term, onToggled, onKeyDown }: TermCellProps) {
       data-term={key}
       aria-pressed={state === 'in'}
       aria-disabled={isFixed || undefined}
-      aria-label={`${name}, ${words[state]}${reason ? `. ${reason}` : ''}`}
       title={reason}
       onClick={isFixed ? undefined : onToggled}
       onKeyDown={onKeyDown}
@@ -78,7 +77,7 @@ export function TermCell({ term, onToggled, onKeyDown }: TermCellProps) {
     >
       <span className={classes('truncate text-label', isFixed && 'justify-self-start bg-surface')}>
         {name}
-      </span>
+      </span>{' '}
       <span className="flex items-center justify-between gap-1">
         <TermShape term={term} />
         <span
@@ -91,6 +90,7 @@ export function TermCell({ term, onToggled, onKeyDown }: TermCellProps) {
           {words[state]}
         </span>
       </span>
+      {reason && <span className="sr-only">. {reason}</span>}
       <span
         className="absolute bottom-0 left-0 h-1 bg-ink-2"
         style={{ width: `${Math.round(100 * Math.max(0, Math.min(1, weight)))}%` }}

@@ -97,7 +97,7 @@ export function BenchParts() {
         </div>
       </Panel>
       <section data-theme="dark" className="p-4 lg:col-span-2">
-        <div className="mb-3 flex justify-end gap-8">
+        <div className="mb-3 flex flex-wrap justify-end gap-x-8 gap-y-2">
           <SavedMark state="sent" claim="Saved 16:21" note="all entries sent" />
           <SavedMark
             state="here"

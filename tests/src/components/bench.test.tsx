@@ -34,10 +34,10 @@ describe('TermBoard', () => {
     const { container } = render(
       <TermBoard label="Terms" factors={['voltage', 'gap']} terms={TERMS} onToggled={onToggled} />,
     );
-    screen.getByRole('button', { name: 'V, +1.3' }).focus();
+    screen.getByRole('button', { name: 'V +1.3' }).focus();
     await userEvent.keyboard('{ArrowDown}{ArrowDown}{ }');
     expect(onToggled).toHaveBeenCalledExactlyOnceWith('V·g');
-    expect(screen.getByRole('button', { name: 'V·g, left out' })).not.toBePressed();
+    expect(screen.getByRole('button', { name: 'V·g left out' })).not.toBePressed();
     expect(await accessibilityProblems(container)).toEqual([]);
   });
 
@@ -46,7 +46,7 @@ describe('TermBoard', () => {
     render(
       <TermBoard label="Terms" factors={['voltage', 'gap']} terms={TERMS} onToggled={onToggled} />,
     );
-    const cell = screen.getByRole('button', { name: /g², not estimable. Too few distinct gaps./ });
+    const cell = screen.getByRole('button', { name: /g² not estimable. Too few distinct gaps./ });
     await userEvent.click(cell);
     expect(cell).toHaveAttribute('aria-disabled', 'true');
     expect(onToggled).not.toHaveBeenCalled();

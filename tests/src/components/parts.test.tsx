@@ -196,7 +196,7 @@ describe('frame of a page', () => {
     const now = steps.getAllByRole('listitem').find((item) => item.ariaCurrent === 'step');
     expect(now ?? steps.getAllByRole('listitem')[1]).toHaveTextContent('Bench, now');
     expect(screen.getByText('Stage 2 of 3: Bench')).toBeInTheDocument();
-    expect(screen.getByRole('button', { name: 'Signed in as Ines Hallworth' })).toBeVisible();
+    expect(screen.getByRole('button', { name: 'IH, signed in as Ines Hallworth' })).toBeVisible();
     expect(await accessibilityProblems(container)).toEqual([]);
   });
 
