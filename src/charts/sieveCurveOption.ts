@@ -115,13 +115,15 @@ function answer({ marked }: SieveCurveInput, tokens: ChartTokens, frame: Frame):
   const { openingMm, passingPercent } = marked;
   const [x, y] = frame.at(Math.log10(openingMm), passingPercent);
   const words = `${formatNumber(passingPercent, 1)}${NARROW}% below ${openingWords(openingMm)}${openingMm < 0.1 ? '' : `${NARROW}mm`}`;
+  // left of a rising curve, unless the axis is too near: then below it
+  const isCrowded = x - frame.left < 150;
   return [
     path(`M${x - 4.5} ${y - 4.5}h9v9h-9Z`, { fill: tokens.ink }),
-    text([x - 10, y - 13], words, {
+    text(isCrowded ? [x + 10, y + 13] : [x - 10, y - 13], words, {
       fill: tokens.ink,
       weight: 600,
       size: 13,
-      align: x - frame.left < 150 ? 'left' : 'right',
+      align: isCrowded ? 'left' : 'right',
       halo: { colour: tokens.surface, width: 3 },
     }),
   ];

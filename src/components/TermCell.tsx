@@ -29,7 +29,11 @@ function TermShape({ term: { row, column, state, estimate } }: { term: Term }) {
         ? [`M0 ${10 - 6 * rise}Q19 ${10 + 12 * rise} 38 ${10 - 6 * rise}`]
         : [`M0 ${from}L38 ${to}`, `M0 ${to}L38 ${from}`];
   return (
-    <svg viewBox="0 0 38 20" className="h-5 w-9 flex-none fill-none" aria-hidden="true">
+    <svg
+      viewBox="0 0 38 20"
+      aria-hidden="true"
+      className={classes('h-5 w-9 flex-none fill-none', state !== 'in' && 'hidden sm:block')}
+    >
       <path d="M0 10H38" className="stroke-line" />
       {shapes.map((shape, index) => (
         <path
@@ -82,8 +86,7 @@ export function TermCell({ term, onToggled, onKeyDown }: TermCellProps) {
         <TermShape term={term} />
         <span
           className={classes(
-            'whitespace-nowrap',
-            state === 'in' ? 'font-mark' : 'text-1',
+            state === 'in' ? 'font-mark whitespace-nowrap' : 'text-1',
             isFixed && 'bg-surface',
           )}
         >
