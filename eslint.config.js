@@ -42,7 +42,7 @@ export default defineConfig([
         'error',
         { argsIgnorePattern: '^_', varsIgnorePattern: '^_' },
       ],
-      complexity: ['error', 12],
+      complexity: ['error', { max: 12, variant: 'modified' }],
       eqeqeq: 'error',
       'max-lines': ['error', { max: 300, skipComments: true, skipBlankLines: true }],
       'max-params': ['error', 4],
@@ -65,6 +65,11 @@ export default defineConfig([
       'tests/**/*.{ts,tsx}',
     ],
     rules: { '@typescript-eslint/no-non-null-assertion': 'off' },
+  },
+  {
+    // ECharts marks `itemStyle` of one member of its series union; the members used here have it
+    files: ['src/charts/**/*.{ts,tsx}'],
+    rules: { '@typescript-eslint/no-deprecated': 'off' },
   },
   {
     files: ['tests/**/*.{ts,tsx}'],
@@ -90,8 +95,8 @@ export default defineConfig([
   closed('shared/schemas', ['^(?!\\.|zod)', '/(calc|policies)/']),
   closed('server', ['^@/', '^react']),
   closed('src', OUTSIDE_SRC),
-  ...['src/lib', 'src/components', 'src/charts', 'src/hooks'].map((room) =>
-    closed(room, [...OUTSIDE_SRC, ...ABOVE_FEATURES]),
+  ...['src/lib', 'src/components', 'src/charts', 'src/hooks', 'src/queries', 'src/engine'].map(
+    (room) => closed(room, [...OUTSIDE_SRC, ...ABOVE_FEATURES]),
   ),
   closed('src/features', [...OUTSIDE_SRC, ...ABOVE_FEATURES, '\\.\\./\\.\\./']),
   prettier,

@@ -15,7 +15,7 @@ export function connect(
   options: { poolMax?: number; statementLimitS?: number } = {},
 ): Sequelize {
   const { poolMax = 12, statementLimitS = STATEMENT_LIMIT_S } = options;
-  return new Sequelize(url, {
+  const sequelize = new Sequelize(url, {
     dialect: 'mariadb',
     logging: false,
     timezone: '+00:00',
@@ -29,4 +29,12 @@ export function connect(
       initSql: [`SET SESSION max_statement_time = ${statementLimitS}`],
     },
   });
+  // Sequelize writes a column's name into its definition: one definition used for two columns would
+  // give both the same name
+  sequelize.addHook('beforeDefine', (attributes) => {
+    for (const [name, definition] of Object.entries(attributes))
+      if (typeof definition === 'object' && 'type' in definition)
+        attributes[name] = Object.assign({}, definition);
+  });
+  return sequelize;
 }

@@ -225,7 +225,7 @@ export function endpoint<
 >(router: Router, route: Route<P, Q, B, A>): void {
   const { method, path, status = 200 } = route;
   const isCreate = route.access === 'signedIn' && route.isCreate === true;
-  routeTable.push({ ...route, isCreate });
+  routeTable.push({ ...route, isCreate, prefix: prefixes.get(router) ?? '' });
   router[method](path, async (request, response) => {
     if (route.access !== 'public' && !request.actor) throw unauthenticated();
     if (isCreate && !KEY_PATTERN.test(request.get('idempotency-key') ?? ''))

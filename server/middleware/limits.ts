@@ -57,16 +57,13 @@ export function perMinute(
   });
 }
 
-/** Wrong passwords for one account from one address: after so many in five minutes it has to wait. */
-export function signInTries(): RequestHandler {
+/** Refuses after so many failed tries in five minutes; what counts as one account is the caller’s. */
+function tries(keyOf: (request: Request) => string): RequestHandler {
   return rateLimit({
     windowMs: 5 * 60_000,
     limit: () => services().config.signInTries,
     skipSuccessfulRequests: true,
-    keyGenerator: (request) => {
-      const { email } = (request.body ?? {}) as { email?: unknown };
-      return `${ipKeyGenerator(request.ip ?? '')} ${typeof email === 'string' ? email.trim().toLowerCase().slice(0, 254) : ''}`;
-    },
+    keyGenerator: keyOf,
     standardHeaders: false,
     legacyHeaders: false,
     handler: (_request, _response, next) => {
@@ -77,4 +74,17 @@ export function signInTries(): RequestHandler {
       );
     },
   });
+}
+
+/** Wrong passwords for one account from one address. */
+export function signInTries(): RequestHandler {
+  return tries((request) => {
+    const { email } = (request.body ?? {}) as { email?: unknown };
+    return `${ipKeyGenerator(request.ip ?? '')} ${typeof email === 'string' ? email.trim().toLowerCase().slice(0, 254) : ''}`;
+  });
+}
+
+/** Failed signatures of one person. */
+export function signatureTries(): RequestHandler {
+  return tries((request) => `signature ${whoAsks(request)}`);
 }

@@ -1,3 +1,4 @@
+import type { FitAnswer } from '@shared/schemas/calc/fit';
 import type { FitInput } from '@shared/schemas/fit';
 import {
   Model,
@@ -24,7 +25,7 @@ export class Fit extends Model<InferAttributes<Fit>, InferCreationAttributes<Fit
   declare why: CreationOptional<string>;
   declare isKept: CreationOptional<boolean>;
   declare dataHash: string;
-  declare answer: Record<string, unknown>;
+  declare answer: FitAnswer;
   declare madeById: number;
   declare version: CreationOptional<number>;
   declare createdAt: CreationOptional<Date>;

@@ -1,5 +1,5 @@
 import type { Model, ModelStatic, Transaction } from 'sequelize';
-import type { Context } from '../context';
+import { SYSTEM_ID, type Context } from '../context';
 import { AuditEvent } from './AuditEvent';
 
 /** Never written to the trail. */
@@ -52,8 +52,9 @@ export function audited(model: ModelStatic<Model>, noun: string): void {
       const { actor, transaction, requestId, why } = contextOf(options, noun);
       await AuditEvent.create(
         {
-          labId: actor.labId,
-          actorId: actor.id,
+          // a new lab’s first event is its own
+          labId: noun === 'lab' ? (row.get('id') as number) : actor.labId,
+          actorId: actor.id === SYSTEM_ID ? null : actor.id,
           actorName: actor.name,
           actorRoles: actor.roles.join(', '),
           noun,

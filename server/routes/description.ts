@@ -11,7 +11,7 @@ function describeSchema(schema: z.ZodType, io: 'input' | 'output'): JsonSchema {
     io,
     unrepresentable: 'any',
     target: 'draft-2020-12',
-  }) as JsonSchema;
+  });
 }
 
 const pathParameters = (path: string) =>

@@ -131,6 +131,7 @@ endpoint(peopleRouter, {
   access: 'signedIn',
   answer: labJsonSchema,
   async handle({ ctx }) {
+    authorize(labPolicy.read, ctx.actor, undefined);
     return presentLab(
       await Lab.findByPk(ctx.actor.labId, { transaction: ctx.transaction, rejectOnEmpty: true }),
     );

@@ -10,7 +10,8 @@ import { presentRun } from '../presenters/run';
 /** Two weighings of one batch agree to this; more retained than fed beyond it is a slip, not scatter. */
 const GAIN_LIMIT_PERCENT = 5;
 
-function checkMasses(record: RunRecord): void {
+/** More on the sieves, or before sieving, than was fed. @throws HttpError 422 `more-than-fed`. */
+export function checkMasses(record: RunRecord): void {
   const recoveredG = record.sieves.reduce((sum, { retainedG }) => sum + retainedG, 0);
   const limitG = record.feedMassG * (1 + GAIN_LIMIT_PERCENT / 100);
   if (recoveredG > limitG)

@@ -1,6 +1,6 @@
 import { because, type Context } from '../context';
 import { impossible } from '../errors';
-import { Run } from '../models/Run';
+import type { Run } from '../models/Run';
 import { StockEntry } from '../models/StockEntry';
 import type { Study } from '../models/Study';
 

@@ -37,6 +37,7 @@ export const customerPolicy = {
 } satisfies Record<string, Rule>;
 
 export const labPolicy = {
+  read: staff('The rules of the lab'),
   change: (actor) => onlyFor(actor, 'Changing the rules of the lab', 'admin'),
 } satisfies Record<string, Rule>;
 

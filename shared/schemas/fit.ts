@@ -43,3 +43,6 @@ export const fitJsonSchema = z.object({
   createdAt: momentSchema,
 });
 export type FitJson = z.infer<typeof fitJsonSchema>;
+
+/** With the full answer of the calculation, in the shape of `POST /api/calc/fit`. */
+export const fitDetailSchema = fitJsonSchema.extend({ answer: z.record(z.string(), z.unknown()) });

@@ -64,6 +64,26 @@ export function computedResults(
   return { specificEnergy: energy.specificEnergyKwhPerT, duration: energy.achievableDurationS };
 }
 
+/** Looks up one response among what was derived, computed or measured. */
+function valueOf(
+  response: ResponseJson,
+  sieve: ReturnType<typeof sieveResults>,
+  computed: ReturnType<typeof computedResults> | null,
+  measured: RunMasses['measured'],
+): number | null {
+  switch (response.kind) {
+    case 'passing':
+      return sieve?.passing[String(response.apertureMm)] ?? null;
+    case 'size':
+      return sieve?.percentiles[String(response.percent)] ?? null;
+    case 'specificEnergy':
+    case 'duration':
+      return computed?.[response.kind] ?? null;
+    case 'measured':
+      return measured.find(({ responseKey }) => responseKey === response.key)?.value ?? null;
+  }
+}
+
 /**
  * All responses of one run, derived from its masses and settings: one value each, null where it cannot
  * be had (not sieved, outside the stack, not measured). Nothing here is ever stored.
@@ -77,25 +97,16 @@ export function runResults(
   const setting = deliveredSetting(run.settings, run.actual);
   const computed =
     run.feedMassG === null ? null : computedResults(envelope, setting, run.feedMassG);
-  const valueOf = (response: ResponseJson): number | null => {
-    switch (response.kind) {
-      case 'passing':
-        return sieve?.passing[String(response.apertureMm)] ?? null;
-      case 'size':
-        return sieve?.percentiles[String(response.percent)] ?? null;
-      case 'specificEnergy':
-      case 'duration':
-        return computed?.[response.kind] ?? null;
-      case 'measured':
-        return run.measured.find(({ responseKey }) => responseKey === response.key)?.value ?? null;
-    }
-  };
+  const results = responses.map((response) => [
+    response.key,
+    valueOf(response, sieve, computed, run.measured),
+  ]);
   return {
-    results: Object.fromEntries(responses.map((response) => [response.key, valueOf(response)])),
+    results: Object.fromEntries(results) as Record<string, number | null>,
     balances: {
       treatment: sieve?.balance.treatment ?? null,
       sieving: sieve?.balance.sieving ?? null,
     },
-    shape: sieve?.shape ?? [],
+    shape: [...(sieve?.shape ?? [])],
   };
 }

@@ -59,6 +59,18 @@ function splitAt(text: string, sign: string, group: string): Decimal | null {
   return { whole: whole.replaceAll(group, ''), fraction, isAmbiguous: false };
 }
 
+/** Only commas or only points: one of them is a decimal sign, several separate thousands. */
+function splitAtOnly(text: string, sign: ',' | '.'): Decimal | null {
+  if (text.split(sign).length > 2)
+    return isGrouped(text, sign)
+      ? { whole: text.replaceAll(sign, ''), fraction: '', isAmbiguous: false }
+      : null;
+  const split = splitAt(text, sign, sign === ',' ? '.' : ',');
+  // 1,234 could mean twelve hundred; a leading zero or any other count of digits could not
+  const isAmbiguous = sign === ',' && isGrouped(text, sign) && !text.startsWith('0');
+  return split && { ...split, isAmbiguous };
+}
+
 /** Which sign is the decimal one: the last when both occur, else the only one. */
 function splitDecimal(text: string, decimal: DecimalSign): Decimal | null {
   if (decimal === 'comma') return splitAt(text, ',', '.');
@@ -66,21 +78,8 @@ function splitDecimal(text: string, decimal: DecimalSign): Decimal | null {
   const point = text.lastIndexOf('.');
   const comma = text.lastIndexOf(',');
   if (point < 0 && comma < 0) return { whole: text, fraction: '', isAmbiguous: false };
-  if (point >= 0 && comma >= 0)
-    return comma > point ? splitAt(text, ',', '.') : splitAt(text, '.', ',');
-  const sign = comma > point ? ',' : '.';
-  if (text.split(sign).length > 2)
-    return isGrouped(text, sign)
-      ? { whole: text.replaceAll(sign, ''), fraction: '', isAmbiguous: false }
-      : null;
-  const split = splitAt(text, sign, sign === ',' ? '.' : ',');
-  // 1,234 could mean twelve hundred; a leading zero or any other count of digits could not
-  return (
-    split && {
-      ...split,
-      isAmbiguous: sign === ',' && isGrouped(text, sign) && !text.startsWith('0'),
-    }
-  );
+  if (point < 0 || comma < 0) return splitAtOnly(text, point < 0 ? ',' : '.');
+  return comma > point ? splitAt(text, ',', '.') : splitAt(text, '.', ',');
 }
 
 const trimmed = (value: number) => String(Number(value.toPrecision(MAX_DIGITS)));
@@ -106,6 +105,13 @@ function noteOf(text: string, shape: Shape, value: number, kept: string): string
   return null;
 }
 
+/** In the kept unit; a conversion keeps 15 digits, so that 0.3 cm is 3 mm. Never −0. */
+function scaledValue({ sign, digits, exponent }: Shape, factor: number): number {
+  const { whole, fraction } = digits;
+  const value = Number(`${sign}${whole || '0'}.${fraction || '0'}e${exponent || '0'}`);
+  return (factor === 1 ? value : Number((value * factor).toPrecision(MAX_DIGITS))) + 0;
+}
+
 /**
  * Reads a number as people type it: decimal comma or point, thin spaces and apostrophes between
  * thousands, a unit behind it. A number is never changed silently: whatever could be meant otherwise
@@ -127,10 +133,7 @@ export function readNumber(text: string, unit = '', decimal: DecimalSign = 'auto
     return problem(
       `The unit ‘${shape.unit}’ is not known here. Use ${knownUnits(unit).join(', ') || 'a bare number'}.`,
     );
-  const { whole, fraction } = shape.digits;
-  const value = Number(`${shape.sign}${whole || '0'}.${fraction || '0'}e${shape.exponent || '0'}`);
-  const scaled = factor === 1 ? value : Number((value * factor).toPrecision(MAX_DIGITS));
-  if (!Number.isFinite(scaled)) return problem(`‘${typed}’ is too large to be a reading.`);
-  const result = scaled === 0 ? 0 : scaled;
-  return { kind: 'number', value: result, note: noteOf(typed, shape, result, unit) };
+  const value = scaledValue(shape, factor);
+  if (!Number.isFinite(value)) return problem(`‘${typed}’ is too large to be a reading.`);
+  return { kind: 'number', value, note: noteOf(typed, shape, value, unit) };
 }

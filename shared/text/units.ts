@@ -1,5 +1,5 @@
 /** Units that people type, as multiples of the unit a field keeps. */
-const FAMILIES = {
+const FAMILIES: Readonly<Record<string, Readonly<Record<string, number>> | undefined>> = {
   g: { mg: 0.001, g: 1, kg: 1000, t: 1_000_000 },
   mm: { um: 0.001, mm: 1, cm: 10, m: 1000 },
   kV: { V: 0.001, kV: 1 },
@@ -11,9 +11,7 @@ const FAMILIES = {
   min: { min: 1, h: 60 },
   J: { J: 1, kJ: 1000 },
   'kWh/t': { 'kWh/t': 1 },
-} as const satisfies Record<string, Record<string, number>>;
-
-export type KnownUnit = keyof typeof FAMILIES;
+};
 
 /** Both micro signs are one. */
 const plain = (unit: string) => unit.replace(/[µμ]/g, 'u');
@@ -23,7 +21,7 @@ const plain = (unit: string) => unit.replace(/[µμ]/g, 'u');
  * A unit without a family of its own takes only itself.
  */
 export function unitFactor(kept: string, typed: string): number | null {
-  const family: Record<string, number> | undefined = FAMILIES[kept as KnownUnit];
+  const family = FAMILIES[kept];
   const wanted = plain(typed).toLowerCase();
   if (!family) return plain(kept).toLowerCase() === wanted ? 1 : null;
   // mg and Mg, mHz and MHz differ: the exact spelling first, any case only when it is not ambiguous
@@ -34,7 +32,7 @@ export function unitFactor(kept: string, typed: string): number | null {
 }
 
 export function knownUnits(kept: string): string[] {
-  const family: Record<string, number> | undefined = FAMILIES[kept as KnownUnit];
+  const family = FAMILIES[kept];
   return family
     ? Object.keys(family).map((unit) => (unit.startsWith('u') ? `µ${unit.slice(1)}` : unit))
     : [kept];

@@ -1,61 +1,82 @@
-import { lazy, Suspense, useRef, type ReactNode } from 'react';
-import type { EChartsCoreOption } from 'echarts/core';
+import { Component, useState, type ReactNode } from 'react';
+import { DataTable, type Column } from '@/components/DataTable';
 import { Notice } from '@/components/Notice';
-import type { ChartSize } from './axes';
-import { ChartBoundary } from './ChartBoundary';
-import { loadChartFonts } from './loadChartFonts';
-import type { ChartTokens } from './tokens';
-import { useChartSurface } from './useChartSurface';
+import { Drawing, type OptionOf } from './Drawing';
 
-const ChartCanvas = lazy(async () => {
-  const [module] = await Promise.all([import('./ChartCanvas'), loadChartFonts()]);
-  return { default: module.ChartCanvas };
-});
+/** A plot that fails leaves the numbers on screen. */
+class PlotBoundary extends Component<{ readonly children: ReactNode }, { hasFailed: boolean }> {
+  override state = { hasFailed: false };
 
-interface ChartProps {
-  /** What the chart shows, in one sentence. */
-  readonly label: string;
-  /** The same numbers: shown instead on request, and when the drawing fails. */
-  readonly table: ReactNode;
-  /** Pure: from colours and size in pixels to the option. */
-  readonly option: (tokens: ChartTokens, size: ChartSize) => EChartsCoreOption;
-  readonly height: number;
-  readonly isTable?: boolean;
-}
+  static getDerivedStateFromError() {
+    return { hasFailed: true };
+  }
 
-/** Draws an option in the colours of the place where it stands, or shows its table. */
-export function Chart({ label, table, option, height, isTable = false }: ChartProps) {
-  if (isTable) return table;
-  const failed = (
-    <>
-      <Notice tone="caution" claim="This chart could not be drawn.">
-        Its numbers are in the table below.
+  override render() {
+    return this.state.hasFailed ? (
+      <Notice tone="caution" claim="This plot could not be drawn.">
+        The same numbers stand in its table.
       </Notice>
-      {table}
-    </>
-  );
+    ) : (
+      this.props.children
+    );
+  }
+}
+
+interface ChartFrameProps<Row> {
+  /** One sentence on what is shown, for screen readers. */
+  readonly label: string;
+  readonly table: {
+    readonly columns: readonly Column<Row>[];
+    readonly rows: readonly Row[];
+    readonly rowKey: (row: Row) => string | number;
+  };
+  readonly children: ReactNode;
+  /** A drawing that takes focus names itself. */
+  readonly isInteractive?: boolean;
+  /** Held by the caller when a key of the drawing switches it too. */
+  readonly view?: { readonly isTable: boolean; readonly onSwitched: (isTable: boolean) => void };
+}
+
+/** Every chart has its table: a switch below it shows the same numbers. */
+export function ChartFrame<Row>({
+  label,
+  table,
+  children,
+  isInteractive = false,
+  view,
+}: ChartFrameProps<Row>) {
+  const [own, setOwn] = useState(false);
+  const { isTable, onSwitched } = view ?? { isTable: own, onSwitched: setOwn };
   return (
-    <ChartBoundary fallback={failed}>
-      <div role="img" aria-label={label}>
-        <Drawing option={option} height={height} />
-      </div>
-    </ChartBoundary>
+    <figure className="grid gap-2 m-0 min-w-0">
+      {isTable ? (
+        <DataTable caption={label} {...table} />
+      ) : (
+        <div {...(isInteractive ? {} : { role: 'img', 'aria-label': label })}>
+          <PlotBoundary>{children}</PlotBoundary>
+        </div>
+      )}
+      <figcaption className="text-right">
+        <button type="button" className="link text-2" onClick={() => onSwitched(!isTable)}>
+          {isTable ? 'As a chart' : 'As a table'}
+        </button>
+      </figcaption>
+    </figure>
   );
 }
 
-function Drawing({ option, height }: Pick<ChartProps, 'option' | 'height'>) {
-  const ref = useRef<HTMLDivElement>(null);
-  const surface = useChartSurface(ref);
+interface ChartProps<Row> extends Omit<
+  ChartFrameProps<Row>,
+  'children' | 'isInteractive' | 'view'
+> {
+  readonly option: OptionOf;
+  readonly height: number;
+}
+
+export function Chart<Row>({ option, height, ...frame }: ChartProps<Row>) {
   return (
-    <div ref={ref} style={{ height }}>
-      {surface && (
-        <Suspense fallback={<div className="size-full bg-sunk" />}>
-          <ChartCanvas
-            option={option(surface.tokens, { width: surface.width, height })}
-            height={height}
-          />
-        </Suspense>
-      )}
-    </div>
+    <ChartFrame {...frame}>
+      <Drawing option={option} height={height} />
+    </ChartFrame>
   );
 }

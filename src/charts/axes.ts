@@ -1,6 +1,6 @@
 import type { CustomSeriesOption } from 'echarts/charts';
 import type { EChartsCoreOption } from 'echarts/core';
-import { formatNumber } from '@/lib/format';
+import { formatPlain } from '@/lib/format';
 import { layer, type Domain } from './frame';
 import { path } from './shapes';
 import { SANS, type ChartTokens } from './tokens';
@@ -42,7 +42,7 @@ interface PlotInput {
   readonly layers: readonly CustomSeriesOption[];
 }
 
-const common = (tokens: ChartTokens, { domain, ticks, format = formatNumber }: AxisInput) => ({
+const common = (tokens: ChartTokens, { domain, ticks, format = formatPlain }: AxisInput) => ({
   type: 'value' as const,
   min: domain.low,
   max: domain.high,

@@ -20,14 +20,14 @@ export interface Bands {
 
 /**
  * Nine bands in round steps of 1, 2.5 or 5, so chosen that the values use most of them: the finest step
- * whose eight limits catch every multiple inside the extent, centred on it.
+ * whose eight limits catch every multiple inside the extent but at most one at either end, centred.
  */
 export function chooseBands({ low, high }: { low: number; high: number }): Bands {
   const gaps = BAND_COUNT - 1;
-  let step = roundStep((high - low) / (gaps + 1));
+  let step = roundStep((high - low) / (gaps + 3));
   const first = () => Math.floor(low / step + 1e-9) + 1;
   const last = () => Math.ceil(high / step - 1e-9) - 1;
-  while (last() - first() + 1 > gaps) step = roundStep(step * 1.01);
+  while (last() - first() + 1 > gaps + 2) step = roundStep(step * 1.01);
   const spare = gaps - (last() - first() + 1);
   const start = first() - Math.ceil(spare / 2);
   const limits = Array.from({ length: gaps }, (_, k) =>

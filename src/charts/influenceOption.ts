@@ -1,5 +1,5 @@
 import type { EChartsCoreOption } from 'echarts/core';
-import { plotOption, type ChartSize } from './axes';
+import { plotOption } from './axes';
 import { layer, type Frame } from './frame';
 import { path, text, type Shape } from './shapes';
 import { roundTicks } from './ticks';
@@ -43,7 +43,6 @@ function draw(points: readonly InfluencePoint[], tokens: ChartTokens, frame: Fra
 export function influenceOption(
   points: readonly InfluencePoint[],
   tokens: ChartTokens,
-  _size: ChartSize,
 ): EChartsCoreOption {
   const orders = points.map(({ order }) => order);
   const x = { low: Math.min(1, ...orders) - 0.7, high: Math.max(2, ...orders) + 0.7 };
@@ -51,7 +50,7 @@ export function influenceOption(
   return plotOption({
     tokens,
     padding: PADDING,
-    x: { name: 'run order', domain: x, ticks: roundTicks(Math.max(1, x.low), x.high, 4) },
+    x: { name: 'run order', domain: x, ticks: roundTicks(Math.max(1, x.low), x.high, 5) },
     y: { name: '', domain: y, ticks: roundTicks(0, y.high, 2) },
     layers: [layer({ x, y, draw: (frame) => draw(points, tokens, frame) })],
   });

@@ -1,5 +1,5 @@
 import type { EChartsCoreOption } from 'echarts/core';
-import { formatNumber, NARROW } from '@/lib/format';
+import { formatNumber, withUnit } from '@/lib/format';
 import { isNarrow, plotOption, type ChartSize } from './axes';
 import { layer, type Frame } from './frame';
 import type { Point } from './geometry';
@@ -41,14 +41,17 @@ export interface SectionInput {
 
 const PADDING = { left: 46, right: 12, top: 34, bottom: 46 };
 const DOMAIN = { low: 0, high: 1 };
+const SAME_PLACE = 0.005;
+const BESIDE = 9;
 
 /** The two rows under a tick: upright set-point above, level one below; the first tick says the units. */
 function tickLabel({ points, x, y }: SectionInput, share: number, isFirst: boolean): string {
   const point = points.reduce((best, each) =>
     Math.abs(each.share - share) < Math.abs(best.share - share) ? each : best,
   );
-  const unit = (name: string) => (isFirst && name ? NARROW + name : '');
-  return `${formatNumber(point.y, y.digits)}${unit(y.unit)}\n${formatNumber(point.x, x.digits)}${unit(x.unit)}`;
+  const words = (value: number, { unit, digits }: SectionInput['x']) =>
+    withUnit(formatNumber(value, digits), isFirst ? unit : '');
+  return `${words(point.y, y)}\n${words(point.x, x)}`;
 }
 
 function draw(input: SectionInput, tokens: ChartTokens, frame: Frame): Shape[] {
@@ -76,13 +79,24 @@ function draw(input: SectionInput, tokens: ChartTokens, frame: Frame): Shape[] {
     line(curve('piLow'), dashed),
     line(curve('mean'), { stroke: tokens.ink, lineWidth: 2 }),
     ...input.limits.flatMap((limit) => limitLine(limit, 'y', frame, tokens)),
-    ...input.runs.flatMap(({ share, value, residualShare }) =>
-      ring(frame.at(share, value), 5, residualShare, plainRing(tokens)),
+    ...placed(input, frame).flatMap(({ at, residualShare }) =>
+      ring(at, 5, residualShare, plainRing(tokens)),
     ),
     ...setPoint(input, tokens, frame),
     letter(0, 'A', 'left'),
     letter(1, 'A′', 'right'),
   ];
+}
+
+/** Replicates stand beside each other, centred on their place. */
+function placed({ runs }: SectionInput, frame: Frame) {
+  const alike = (share: number) => runs.filter((run) => Math.abs(run.share - share) < SAME_PLACE);
+  return runs.map((run) => {
+    const group = alike(run.share);
+    const aside = (group.indexOf(run) - (group.length - 1) / 2) * BESIDE;
+    const [x, y] = frame.at(run.share, run.value);
+    return { at: [x + aside, y] as const, residualShare: run.residualShare };
+  });
 }
 
 function setPoint(input: SectionInput, tokens: ChartTokens, frame: Frame): Shape[] {

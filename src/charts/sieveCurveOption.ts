@@ -1,5 +1,5 @@
 import type { EChartsCoreOption } from 'echarts/core';
-import { formatNumber, NARROW } from '@/lib/format';
+import { formatAperture, formatNumber, formatPlain, withUnit } from '@/lib/format';
 import { isNarrow, plotOption, type ChartSize } from './axes';
 import { layer, type Domain, type Frame } from './frame';
 import type { Point } from './geometry';
@@ -21,8 +21,8 @@ export interface SieveCurveInput {
     readonly isFeed: boolean;
     readonly points: readonly SievePoint[];
   }[];
-  /** The opening that a goal asks about. */
-  readonly marked: SievePoint | null;
+  /** The openings that goals ask about. */
+  readonly marked: readonly SievePoint[];
 }
 
 const PADDING = { left: 44, right: 14, top: 30, bottom: 44 };
@@ -41,9 +41,6 @@ function openingDomain({ points, others }: SieveCurveInput): Domain {
     high: Math.log10(Math.max(...openings)) + 0.1,
   };
 }
-
-const openingWords = (opening: number) =>
-  opening < 0.1 ? `${formatNumber(opening * 1000, 0)}${NARROW}µm` : formatNumber(opening);
 
 /** Upright lines at 1, 2 … 9 of every decade. */
 function decades({ low, high }: Domain, tokens: ChartTokens, frame: Frame): Shape[] {
@@ -91,16 +88,16 @@ function draw(input: SieveCurveInput, tokens: ChartTokens, frame: Frame): Shape[
           : []),
       ];
     }),
-    ...readOff(input, tokens, frame),
+    ...input.marked.flatMap((point) => readOff(point, tokens, frame)),
     line(curve(input.points), { stroke: tokens.ink, lineWidth: 2.4 }),
     ...squares,
-    ...answer(input, tokens, frame),
+    ...input.marked.flatMap((point) => answer(point, tokens, frame)),
   ];
 }
 
-function readOff({ marked }: SieveCurveInput, tokens: ChartTokens, frame: Frame): Shape[] {
-  if (!marked) return [];
-  const [x, y] = frame.at(Math.log10(marked.openingMm), marked.passingPercent);
+/** From the opening up to the curve and across to the percentage. */
+function readOff(point: SievePoint, tokens: ChartTokens, frame: Frame): Shape[] {
+  const [x, y] = frame.at(Math.log10(point.openingMm), point.passingPercent);
   return [
     path(`M${x} ${frame.top + frame.height}V${y}H${frame.left}`, {
       stroke: tokens['ink-2'],
@@ -110,11 +107,9 @@ function readOff({ marked }: SieveCurveInput, tokens: ChartTokens, frame: Frame)
   ];
 }
 
-function answer({ marked }: SieveCurveInput, tokens: ChartTokens, frame: Frame): Shape[] {
-  if (!marked) return [];
-  const { openingMm, passingPercent } = marked;
-  const [x, y] = frame.at(Math.log10(openingMm), passingPercent);
-  const words = `${formatNumber(passingPercent, 1)}${NARROW}% below ${openingWords(openingMm)}${openingMm < 0.1 ? '' : `${NARROW}mm`}`;
+function answer(point: SievePoint, tokens: ChartTokens, frame: Frame): Shape[] {
+  const [x, y] = frame.at(Math.log10(point.openingMm), point.passingPercent);
+  const words = `${withUnit(formatNumber(point.passingPercent, 1), '%')} below ${formatAperture(point.openingMm)}`;
   // left of a rising curve, unless the axis is too near: then below it
   const isCrowded = x - frame.left < 150;
   return [
@@ -128,6 +123,10 @@ function answer({ marked }: SieveCurveInput, tokens: ChartTokens, frame: Frame):
     }),
   ];
 }
+
+/** The axis says mm once; only what is finer carries its own unit. */
+const axisWords = (openingMm: number) =>
+  openingMm < 0.1 ? formatAperture(openingMm) : formatPlain(openingMm);
 
 /** Passing over opening on a logarithmic scale: the run with its sieves, the feed and other runs behind. */
 export function sieveCurveOption(
@@ -144,7 +143,7 @@ export function sieveCurveOption(
       name: 'Opening, mm (log)',
       domain: x,
       ticks: thinned(inside, isNarrow(size)).map((mm) => Math.log10(mm)),
-      format: (power) => openingWords(Number((10 ** power).toPrecision(4))),
+      format: (power) => axisWords(Number((10 ** power).toPrecision(4))),
     },
     y: { name: 'Passing, %', domain: PERCENT, ticks: PERCENT_TICKS },
     layers: [

@@ -1,67 +1,53 @@
-import type { ChartSize } from './axes';
-import type { Domain } from './frame';
 import type { Point } from './geometry';
 
-export interface SlabInput {
-  readonly x: Domain;
-  readonly y: Domain;
-  /** The pegs' height; on a log scale the caller gives logarithms. */
-  readonly z: Domain;
-  /** What can be dialled, as a ring over x and y. */
-  readonly settable: readonly Point[];
-  readonly pegs: readonly {
-    readonly x: number;
-    readonly y: number;
-    readonly z: number;
-    readonly isSettable: boolean;
-  }[];
-}
-
-/** All runs at one place of the floor; repeats of a height are counted. */
+/** A setting on the settable floor: across, deep and high as shares of their ranges, 0…1. */
 export interface Peg {
   readonly x: number;
   readonly y: number;
-  readonly isSettable: boolean;
-  readonly heads: readonly { readonly z: number; readonly count: number }[];
+  readonly z: number;
+  /** Runs at this setting. */
+  readonly count: number;
+  /** It breaks a limit of the rig. */
+  readonly isBroken: boolean;
 }
 
-/** Gathers runs into pegs, the far ones first so that the near ones stand before them. */
-export function pegsOf(runs: SlabInput['pegs']): Peg[] {
-  const places = new Map<string, { x: number; y: number; isSettable: boolean; zs: number[] }>();
-  for (const { x, y, z, isSettable } of runs) {
-    const key = `${x} ${y}`;
-    const place = places.get(key) ?? { x, y, isSettable: true, zs: [] };
-    places.set(key, {
-      ...place,
-      isSettable: place.isSettable && isSettable,
-      zs: [...place.zs, z],
-    });
+/** All settings above one place of the floor, the lowest first. */
+export interface Stack {
+  readonly x: number;
+  readonly y: number;
+  readonly heads: readonly Peg[];
+}
+
+/** Pegs of one place share one stick; the far ones come first, so that the near ones stand before them. */
+export function stacksOf(pegs: readonly Peg[]): Stack[] {
+  const places = new Map<string, Peg[]>();
+  for (const peg of pegs) {
+    const place = `${peg.x} ${peg.y}`;
+    places.set(place, [...(places.get(place) ?? []), peg]);
   }
   return [...places.values()]
-    .sort((one, other) => other.y - one.y || one.x - other.x)
-    .map(({ x, y, isSettable, zs }) => ({
-      x,
-      y,
-      isSettable,
-      heads: [...new Set(zs)]
-        .sort((a, b) => a - b)
-        .map((z) => ({ z, count: zs.filter((each) => each === z).length })),
-    }));
+    .map((heads) => ({
+      x: heads[0]!.x,
+      y: heads[0]!.y,
+      heads: heads.sort((one, other) => one.z - other.z),
+    }))
+    .sort((one, other) => other.y - one.y || one.x - other.x);
 }
 
-const INSET = 8;
-const SKEW = 0.24;
+export const SLAB_WIDTH = 300;
+export const SLAB_HEIGHT = 164;
 
-/** From settings to pixels on the tilted floor; with a height, above it. */
-export function slabScale({ x, y, z }: SlabInput, { width, height }: ChartSize) {
-  const along = (width - 2 * INSET) / (1 + SKEW);
-  const deep = height * 0.46;
-  const rise = height * 0.38;
-  const base = height - 8;
-  const share = (value: number, { low, high }: Domain) => (value - low) / (high - low || 1);
-  return (u: number, v: number, w?: number): Point => {
-    const [a, c] = [share(u, x), share(v, y)];
-    const up = w === undefined ? 0 : (0.14 + 0.8 * share(w, z)) * rise;
-    return [INSET + a * along + c * along * SKEW, base - c * deep - up];
-  };
+const INSET = 10;
+const SKEW = 0.24;
+const ALONG = (SLAB_WIDTH - 2 * INSET) / (1 + SKEW);
+const DEEP = 70;
+const BASE = SLAB_HEIGHT - 10;
+/** The lowest head still stands clear of the floor. */
+const FOOT = 9;
+const RISE = 50;
+
+/** From shares of the ranges to pixels on the tilted floor; with a height, above it. */
+export function onSlab(x: number, y: number, z?: number): Point {
+  const up = z === undefined ? 0 : FOOT + RISE * z;
+  return [INSET + x * ALONG + y * ALONG * SKEW, BASE - y * DEEP - up];
 }

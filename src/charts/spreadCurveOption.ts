@@ -1,6 +1,6 @@
 import type { EChartsCoreOption } from 'echarts/core';
 import { formatNumber } from '@/lib/format';
-import { plotOption, type ChartSize } from './axes';
+import { plotOption } from './axes';
 import { layer, type Frame } from './frame';
 import { area, circle, line, text, type Shape } from './shapes';
 import type { ChartTokens } from './tokens';
@@ -47,11 +47,7 @@ function draw(
 }
 
 /** How well a plan predicts over its region: the share of it with at most so much spread of the mean. */
-export function spreadCurveOption(
-  input: SpreadCurveInput,
-  tokens: ChartTokens,
-  _size: ChartSize,
-): EChartsCoreOption {
+export function spreadCurveOption(input: SpreadCurveInput, tokens: ChartTokens): EChartsCoreOption {
   const highest = input.highest ?? Math.max(1.4, ...input.spreads);
   const y = { low: 0, high: highest };
   const every = highest > 3 ? Math.ceil(highest / 3) : 0.5;

@@ -1,62 +1,44 @@
-import { classes } from '@/lib/classes';
-
-/** One draw: every goal holds, or a response lies above its limit, below one, or both. */
-export type Outcome = 'holds' | 'above' | 'below' | 'both';
-
-const ORDER: readonly Outcome[] = ['holds', 'above', 'below', 'both'];
-const COLUMNS = 25;
-const PITCH = 16;
-const SIDE = 13;
-
 interface HundredSquaresProps {
-  /** The draws in any order; at most a hundred are drawn, misses last. */
-  readonly outcomes: readonly Outcome[];
-  readonly className?: string;
+  /** 0…1. */
+  readonly probability: number;
+  readonly error: number | null;
 }
 
-/** One square a draw. Filled = all goals hold; hollow with a bar on top = above a limit, below = under one. */
-export function HundredSquares({ outcomes, className }: HundredSquaresProps) {
-  const drawn = outcomes.slice(0, 100);
-  const sorted = [...drawn].sort((one, other) => ORDER.indexOf(one) - ORDER.indexOf(other));
-  const held = drawn.filter((outcome) => outcome === 'holds').length;
-  const rows = Math.max(1, Math.ceil(sorted.length / COLUMNS));
+const COLUMNS = 25;
+const STEP = 11;
+const SIDE = 8;
+
+/** One square for each imagined repeat of a hundred: filled where all goals hold, misses last. */
+export function HundredSquares({ probability, error }: HundredSquaresProps) {
+  const hits = Math.round(100 * probability);
+  const words = `${hits} of 100 imagined repeats meet every goal${error === null ? '' : `, ±${(100 * error).toFixed(1)}`}`;
   return (
     <svg
-      viewBox={`0 0 ${COLUMNS * PITCH} ${rows * PITCH}`}
+      width={COLUMNS * STEP}
+      height={4 * STEP}
+      viewBox={`0 0 ${COLUMNS * STEP} ${4 * STEP}`}
+      className="max-w-full"
       role="img"
-      aria-label={`${held} of ${drawn.length} imagined repeats meet every goal`}
-      className={classes('block w-full', className)}
+      aria-label={words}
     >
-      {sorted.map((outcome, index) => (
-        <Square
-          key={index}
-          outcome={outcome}
-          x={(index % COLUMNS) * PITCH}
-          y={Math.floor(index / COLUMNS) * PITCH + 0.5}
-        />
-      ))}
+      {Array.from({ length: 100 }, (_, i) => {
+        const x = (i % COLUMNS) * STEP;
+        const y = Math.floor(i / COLUMNS) * STEP;
+        return i < hits ? (
+          <rect key={i} x={x} y={y} width={SIDE} height={SIDE} fill="var(--ink-2)" />
+        ) : (
+          <rect
+            key={i}
+            x={x + 0.6}
+            y={y + 0.6}
+            width={SIDE - 1.2}
+            height={SIDE - 1.2}
+            fill="none"
+            stroke="var(--ink-2)"
+            strokeWidth={1.2}
+          />
+        );
+      })}
     </svg>
-  );
-}
-
-function Square({ outcome, x, y }: { outcome: Outcome; x: number; y: number }) {
-  if (outcome === 'holds')
-    return <rect x={x} y={y} width={SIDE} height={SIDE} className="fill-ink-2" />;
-  const bars = [
-    outcome !== 'below' && `M${x} ${y + 2}h${SIDE}`,
-    outcome !== 'above' && `M${x} ${y + SIDE - 2}h${SIDE}`,
-  ].filter(Boolean);
-  return (
-    <>
-      <rect
-        x={x + 0.6}
-        y={y + 0.6}
-        width={SIDE - 1.2}
-        height={SIDE - 1.2}
-        strokeWidth={1.2}
-        className="fill-surface stroke-ink-2"
-      />
-      <path d={bars.join('')} strokeWidth={4} className="stroke-ink" />
-    </>
   );
 }

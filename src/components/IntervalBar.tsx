@@ -1,92 +1,69 @@
-import type { GoalSide } from './GoalMark';
-
-export interface Limit {
-  readonly value: number;
-  readonly side: GoalSide;
-}
-
-export interface Interval {
-  readonly low: number;
-  readonly high: number;
-}
-
 interface IntervalBarProps {
-  /** One scale per response on a page. */
-  readonly scale: Interval;
-  readonly estimate: number | null;
-  /** Of the mean: the block. */
-  readonly mean?: Interval | null;
-  /** Of one new run: the whisker. */
-  readonly single?: Interval | null;
-  readonly limits?: readonly Limit[];
-  /** A stroke across, at no effect for instance. */
-  readonly zero?: number;
+  /** One scale for a response on a page. */
+  readonly scale: readonly [number, number];
+  readonly predicted: number;
+  readonly ci?: readonly [number | null, number | null];
+  readonly pi?: readonly [number | null, number | null];
+  readonly limits?: readonly { readonly value: number; readonly holdsAbove: boolean }[];
+  readonly width?: number;
 }
 
 const HEIGHT = 22;
-const MIDDLE = HEIGHT / 2;
 
-/** Which way the teeth of a limit point: to the side that holds. */
-const toothSide = (side: GoalSide): readonly number[] => {
-  if (side === 'atLeast') return [1];
-  return side === 'atMost' ? [-1] : [];
-};
-
-/** Whisker = one new run, block = mean, tick = estimate, toothed stroke = limit. As wide as its cell. */
+/** Whisker: one new run; block: the mean; tick: the estimate; toothed stroke: a limit. */
 export function IntervalBar({
   scale,
-  estimate,
-  mean,
-  single,
+  predicted,
+  ci,
+  pi,
   limits = [],
-  zero,
+  width = 150,
 }: IntervalBarProps) {
-  const share = (value: number) =>
-    Math.max(0, Math.min(1, (value - scale.low) / (scale.high - scale.low || 1))) * 100;
-  const x = (value: number) => `${share(value).toFixed(2)}%`;
+  const [low, high] = scale;
+  const x = (value: number) =>
+    Math.max(0, Math.min(width, ((value - low) / Math.max(1e-12, high - low)) * width));
+  const mid = HEIGHT / 2;
+  const [ciLow, ciHigh] = ci ?? [null, null];
+  const [piLow, piHigh] = pi ?? [null, null];
   return (
-    <svg width="100%" height={HEIGHT} aria-hidden="true" className="block min-w-16">
-      <line x1="0" x2="100%" y1={MIDDLE} y2={MIDDLE} className="stroke-line" />
-      {zero !== undefined && (
-        <line x1={x(zero)} x2={x(zero)} y1={1} y2={HEIGHT - 1} className="stroke-line-strong" />
-      )}
-      {limits.map(({ value, side }) => (
-        <svg key={`${side} ${value}`} x={x(value)} overflow="visible">
-          <path d={`M0 0V${HEIGHT}`} strokeWidth={1.2} className="stroke-ink" />
-          {toothSide(side).map((way) => (
+    <svg width={width} height={HEIGHT} viewBox={`0 0 ${width} ${HEIGHT}`} aria-hidden="true">
+      <path d={`M0 ${mid}H${width}`} stroke="var(--line)" />
+      {limits.map(({ value, holdsAbove }) => (
+        <g key={`${value} ${holdsAbove}`}>
+          <path d={`M${x(value)} 0V${HEIGHT}`} stroke="var(--ink)" strokeWidth="1.2" />
+          {[0.22, 0.5, 0.78].map((share) => (
             <path
-              key={way}
-              d={[0.22, 0.5, 0.78]
-                .map((at) => HEIGHT * at)
-                .map((y) => `M0 ${y - 3}L${4.5 * way} ${y}L0 ${y + 3}Z`)
-                .join('')}
-              className="fill-ink"
+              key={share}
+              d={`M${x(value)} ${HEIGHT * share - 3}l${holdsAbove ? 4.5 : -4.5} 3l${holdsAbove ? -4.5 : 4.5} 3Z`}
+              fill="var(--ink)"
             />
           ))}
-        </svg>
-      ))}
-      {single && (
-        <g strokeWidth={1.2} className="stroke-ink-2">
-          <line x1={x(single.low)} x2={x(single.high)} y1={MIDDLE} y2={MIDDLE} />
-          {[single.low, single.high].map((end) => (
-            <line key={end} x1={x(end)} x2={x(end)} y1={MIDDLE - 3.5} y2={MIDDLE + 3.5} />
-          ))}
         </g>
-      )}
-      {mean && (
-        <rect
-          x={x(mean.low)}
-          y={MIDDLE - 3}
-          width={`${Math.max(0.4, share(mean.high) - share(mean.low)).toFixed(2)}%`}
-          height={6}
-          className="fill-ink-2"
+      ))}
+      {piLow !== null && piHigh !== null && (
+        <path
+          d={`M${x(piLow)} ${mid}H${x(piHigh)}M${x(piLow)} ${mid - 3.5}v7M${x(piHigh)} ${mid - 3.5}v7`}
+          stroke="var(--ink-2)"
+          strokeWidth="1.2"
         />
       )}
-      {estimate !== null && (
-        <svg x={x(estimate)} overflow="visible">
-          <rect x={-1.5} y={MIDDLE - 6} width={3} height={12} className="fill-ink stroke-surface" />
-        </svg>
+      {ciLow !== null && ciHigh !== null && (
+        <rect
+          x={x(ciLow)}
+          y={mid - 3}
+          width={Math.max(1, x(ciHigh) - x(ciLow))}
+          height={6}
+          fill="var(--ink-2)"
+        />
       )}
+      <rect
+        x={x(predicted) - 1.5}
+        y={mid - 6}
+        width={3}
+        height={12}
+        fill="var(--ink)"
+        stroke="var(--surface)"
+      />
     </svg>
   );
 }

@@ -1,67 +1,62 @@
-import { classes } from '@/lib/classes';
+import { useId } from 'react';
 import { formatMass } from '@/lib/format';
 
-export interface LedgerPart {
-  readonly kind: 'used' | 'lost' | 'reserved' | 'left';
-  /** “Used: 22 runs, 2 head bags” */
-  readonly label: string;
-  readonly massG: number;
-}
-
-const FILLS: Record<LedgerPart['kind'], string> = {
-  used: 'bg-ink-2',
-  lost: 'bg-hatch-lost',
-  reserved: 'bg-hatch-reserved',
-  left: 'bg-surface',
-};
-
 interface LedgerBarProps {
-  readonly parts: readonly LedgerPart[];
-  /** “Received 2 March” and how much: the bar's full length. */
-  readonly total: { readonly label: string; readonly massG: number };
+  readonly usedG: number;
+  readonly lostG: number;
+  readonly reservedG: number;
+  readonly leftG: number;
 }
 
-/** Where the sample went. Used solid, lost cross-hatched, reserved hatched, left blank; the same keys below. */
-export function LedgerBar({ parts, total }: LedgerBarProps) {
-  const shown = parts.filter(({ massG }) => massG > 0);
-  const whole = Math.max(
-    total.massG,
-    shown.reduce((sum, { massG }) => sum + massG, 0),
-  );
+/** The sample budget: used solid, lost cross-hatched, reserved hatched, left blank; keys below. */
+export function LedgerBar({ usedG, lostG, reservedG, leftG }: LedgerBarProps) {
+  const id = useId();
+  const total = Math.max(1e-9, usedG + lostG + reservedG + leftG);
+  const parts = [
+    { key: 'used', name: 'Used', massG: usedG, fill: 'var(--ink-2)' },
+    { key: 'lost', name: 'Lost or sent back', massG: lostG, fill: `url(#${id}-lost)` },
+    { key: 'reserved', name: 'Reserved for runs', massG: reservedG, fill: `url(#${id}-reserved)` },
+    { key: 'left', name: 'Left', massG: leftG, fill: 'var(--surface)' },
+  ];
+  let from = 0;
+  const bars = parts.map((part) => {
+    const start = from;
+    from += (part.massG / total) * 400;
+    return { ...part, x: start, width: from - start };
+  });
   return (
-    <div>
-      <div aria-hidden="true" className="mb-2 flex h-5 border border-ink bg-surface">
-        {shown.map(({ kind, label, massG }) => (
-          <span
-            key={label}
-            className={classes('border-l border-ink first:border-l-0', FILLS[kind])}
-            style={{ width: `${((100 * massG) / whole).toFixed(2)}%` }}
-          />
+    <div className="grid gap-3">
+      <svg
+        viewBox="0 0 400 18"
+        width="100%"
+        height="18"
+        preserveAspectRatio="none"
+        aria-hidden="true"
+      >
+        <defs>
+          <pattern id={`${id}-lost`} width="5" height="5" patternUnits="userSpaceOnUse">
+            <path d="M0 0L5 5M5 0L0 5" stroke="var(--ink-2)" />
+          </pattern>
+          <pattern id={`${id}-reserved`} width="4" height="4" patternUnits="userSpaceOnUse">
+            <path d="M1 0V4" stroke="var(--ink-2)" />
+          </pattern>
+        </defs>
+        {bars.map(({ key, x, width, fill }) => (
+          <rect key={key} x={x} y={0.5} width={width} height={17} fill={fill} />
         ))}
-      </div>
-      <table className="w-full border-collapse text-2">
-        <tbody>
-          {parts.map(({ kind, label, massG }) => (
-            <tr key={label} className="border-b border-line">
-              <th scope="row" className="py-1.5 text-left font-body">
-                <span
-                  className={classes('mr-2 inline-block h-3 w-3.5 border border-ink', FILLS[kind])}
-                />
-                {label}
-              </th>
-              <td className={classes('text-right', kind === 'left' && 'font-head')}>
-                {formatMass(massG)}
-              </td>
-            </tr>
-          ))}
-          <tr className="text-ink-3">
-            <th scope="row" className="py-1.5 text-left font-body">
-              {total.label}
-            </th>
-            <td className="text-right">{formatMass(total.massG)}</td>
-          </tr>
-        </tbody>
-      </table>
+        <rect x={0.5} y={0.5} width={399} height={17} fill="none" stroke="var(--ink)" />
+      </svg>
+      <dl className="grid gap-1 text-2">
+        {bars.map(({ key, name, massG, fill }) => (
+          <div key={key} className="flex items-center gap-2">
+            <svg width="16" height="12" aria-hidden="true">
+              <rect x={0.5} y={0.5} width={15} height={11} fill={fill} stroke="var(--ink)" />
+            </svg>
+            <dt className="flex-1">{name}</dt>
+            <dd>{formatMass(massG)}</dd>
+          </div>
+        ))}
+      </dl>
     </div>
   );
 }

@@ -1,44 +1,46 @@
-import { useId } from 'react';
-import type { Option } from './SelectField';
+import { useRef, type KeyboardEvent } from 'react';
 
 interface SegmentsProps<Value extends string> {
-  /** What is chosen here, for readers. */
   readonly label: string;
-  readonly options: readonly Option<Value>[];
   readonly value: Value;
-  readonly onPicked: (value: Value) => void;
+  readonly options: readonly { readonly value: Value; readonly label: string }[];
+  readonly onChange: (value: Value) => void;
 }
 
-/** A switch between two to five views of one thing. Radios underneath: arrows move, one is always on. */
+/** One of a few: arrows move, the picked one is ink. */
 export function Segments<Value extends string>({
   label,
-  options,
   value,
-  onPicked,
+  options,
+  onChange,
 }: SegmentsProps<Value>) {
-  const name = useId();
+  const group = useRef<HTMLDivElement>(null);
+  const onKeyDown = (event: KeyboardEvent) => {
+    const by = { ArrowRight: 1, ArrowDown: 1, ArrowLeft: -1, ArrowUp: -1 }[event.key];
+    if (by === undefined) return;
+    event.preventDefault();
+    const at = options.findIndex((option) => option.value === value);
+    const next = options[(at + by + options.length) % options.length];
+    if (!next) return;
+    onChange(next.value);
+    group.current
+      ?.querySelector<HTMLButtonElement>(`[data-value="${CSS.escape(next.value)}"]`)
+      ?.focus();
+  };
   return (
-    <div
-      role="radiogroup"
-      aria-label={label}
-      className="inline-flex rounded border border-line-strong bg-surface"
-    >
+    <div ref={group} role="radiogroup" aria-label={label} className="seg" onKeyDown={onKeyDown}>
       {options.map((option) => (
-        <label
+        <button
           key={option.value}
-          className="relative grid h-9 cursor-pointer place-items-center border-l border-line px-3 text-2 whitespace-nowrap first:border-l-0 has-checked:bg-ink has-checked:font-mark has-checked:text-surface has-focus-visible:outline-2 has-focus-visible:outline-offset-2 has-focus-visible:outline-focus has-disabled:cursor-not-allowed has-disabled:text-ink-3 sm:h-7"
+          type="button"
+          role="radio"
+          data-value={option.value}
+          aria-checked={option.value === value}
+          tabIndex={option.value === value ? 0 : -1}
+          onClick={() => onChange(option.value)}
         >
-          <input
-            type="radio"
-            name={name}
-            value={option.value}
-            checked={option.value === value}
-            disabled={option.isDisabled}
-            onChange={() => onPicked(option.value)}
-            className="absolute inset-0 cursor-pointer appearance-none outline-0"
-          />
           {option.label}
-        </label>
+        </button>
       ))}
     </div>
   );

@@ -1,100 +1,99 @@
-import { useId, type KeyboardEvent } from 'react';
-import { formatNumber } from '@/lib/format';
-import { classes } from '@/lib/classes';
-import { DialScale, type DialRange } from './DialScale';
-import { digitsOf, nudged, offsetOf } from './stepValue';
-
-const SIZES = {
-  target: { box: 'h-11', button: 'w-10 text-5', figure: 'text-6' },
-  bench: { box: 'h-24', button: 'w-24 text-7', figure: 'text-8' },
-} as const;
+import { useId } from 'react';
+import { formatPlain, withUnit } from '@/lib/format';
 
 interface StepperProps {
   readonly label: string;
-  readonly unit?: string;
+  readonly unit: string;
   readonly value: number;
-  readonly range: DialRange;
-  readonly onStepped: (value: number) => void;
-  readonly size?: keyof typeof SIZES;
-  readonly isDisabled?: boolean;
+  /** All settable values, ascending; those in `allowed` keep the limits with the other set-points. */
+  readonly values: readonly number[];
+  readonly allowed: ReadonlySet<number>;
+  readonly onChange: (value: number) => void;
 }
 
-/**
- * A set-point, one settable step at a time, over its dial scale. The figure takes the keys of a spin
- * button: arrows one step, Page keys five, Home and End the ends of what may be set.
- */
-export function Stepper({
-  label,
-  unit = '',
-  value,
-  range,
-  onStepped,
-  size = 'target',
-  isDisabled = false,
-}: StepperProps) {
+const WIDTH = 260;
+const INSET = 8;
+
+/** Minus, figure, plus, and below it the dial: steps as ticks, a heavy line where the limits allow. */
+export function Stepper({ label, unit, value, values, allowed, onChange }: StepperProps) {
   const id = useId();
-  const digits = digitsOf(range.step);
-  const figure = formatNumber(value, digits);
-  const step = (steps: number) => {
-    const next = nudged(value, steps, range);
-    if (!isDisabled && next !== value) onStepped(next);
+  const at = values.indexOf(value);
+  const [first = 0, last = 1] = [values[0], values.at(-1)];
+  const x = (each: number) =>
+    INSET + ((WIDTH - 2 * INSET) * (each - first)) / Math.max(1e-9, last - first);
+  const every = Math.ceil(values.length / 26);
+  const labelled = new Set([first, values[Math.floor((values.length - 1) / 2)], last]);
+  const open = values.filter((each) => allowed.has(each));
+  const move = (by: number) => {
+    const next = values[at + by];
+    if (next !== undefined) onChange(next);
   };
-  const onKeyDown = (event: KeyboardEvent) => {
-    const steps = offsetOf(event.key);
-    if (steps === null) return;
-    event.preventDefault();
-    step(steps);
-  };
-  const buttonOf = (steps: 1 | -1) => (
-    <button
-      type="button"
-      aria-label={`${label} one step ${steps > 0 ? 'up' : 'down'}`}
-      disabled={isDisabled || nudged(value, steps, range) === value}
-      onClick={() => step(steps)}
-      className={classes(
-        'flex-none text-ink-2 hover:bg-sunk disabled:text-line-strong',
-        SIZES[size].button,
-      )}
-    >
-      {steps > 0 ? '+' : '−'}
-    </button>
-  );
   return (
-    <div
-      role="group"
-      aria-labelledby={id}
-      className="grid grid-cols-2 items-center gap-x-3 gap-y-2 md:grid-cols-setting"
-    >
-      <div>
-        <div id={id}>{label}</div>
-        <div className="text-1 text-ink-3">step {formatNumber(range.step)}</div>
-      </div>
-      <div
-        className={classes('flex rounded border border-line-strong bg-surface', SIZES[size].box)}
-      >
-        {buttonOf(-1)}
-        <div
-          role="spinbutton"
-          tabIndex={isDisabled ? -1 : 0}
-          aria-label={label}
-          aria-valuenow={value}
-          aria-valuemin={range.allowedLow ?? range.min}
-          aria-valuemax={range.allowedHigh ?? range.max}
-          aria-valuetext={`${figure} ${unit}`.trim()}
-          onKeyDown={onKeyDown}
-          className={classes(
-            'flex flex-1 items-baseline justify-center gap-1 self-stretch border-x border-line font-mono leading-none',
-            SIZES[size].figure,
-          )}
+    <div className="grid gap-1" role="group" aria-labelledby={id}>
+      <div className="flex items-center gap-2">
+        <span id={id} className="text-2 text-ink-2 flex-1">
+          {label}
+        </span>
+        <button
+          type="button"
+          className="btn"
+          aria-label={`${label} one step down`}
+          disabled={at <= 0}
+          onClick={() => move(-1)}
         >
-          <span className="self-center">{figure}</span>
-          {unit && <span className="self-center text-2 text-ink-3">{unit}</span>}
-        </div>
-        {buttonOf(1)}
+          −
+        </button>
+        <output className="mono text-5 text-right min-w-16" aria-live="polite">
+          {withUnit(formatPlain(value), unit)}
+        </output>
+        <button
+          type="button"
+          className="btn"
+          aria-label={`${label} one step up`}
+          disabled={at >= values.length - 1}
+          onClick={() => move(1)}
+        >
+          +
+        </button>
       </div>
-      <div className="col-span-2 md:col-span-1">
-        <DialScale range={range} value={value} />
-      </div>
+      <svg viewBox={`0 0 ${WIDTH} 36`} width="100%" aria-hidden="true">
+        <path d={`M${INSET} 12H${WIDTH - INSET}`} className="axis" />
+        {values.map((each, i) =>
+          i % every === 0 || labelled.has(each) ? (
+            <path
+              key={each}
+              d={`M${x(each).toFixed(1)} 12v${labelled.has(each) ? 7 : 4}`}
+              className="axis"
+            />
+          ) : null,
+        )}
+        {[...labelled].map((each) =>
+          each === undefined ? null : (
+            <text
+              key={each}
+              x={x(each)}
+              y={32}
+              className="ax"
+              textAnchor={each === first ? 'start' : each === last ? 'end' : 'middle'}
+            >
+              {formatPlain(each)}
+            </text>
+          ),
+        )}
+        {open.length > 0 && (
+          <path
+            d={`M${x(open[0] ?? 0).toFixed(1)} 12H${x(open.at(-1) ?? 0).toFixed(1)}`}
+            stroke="var(--ink)"
+            strokeWidth={3}
+          />
+        )}
+        <path
+          d={`M${x(value).toFixed(1)} 4l5.5 6l-5.5 6l-5.5 -6Z`}
+          fill="var(--accent)"
+          stroke="var(--surface)"
+          strokeWidth={1.2}
+        />
+      </svg>
     </div>
   );
 }

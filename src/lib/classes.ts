@@ -1,4 +1,3 @@
-/** Joins class names; what does not apply is false or undefined. */
-export function classes(...names: readonly (string | false | undefined)[]): string {
-  return names.filter(Boolean).join(' ');
-}
+/** Joins the class names that apply. */
+export const classes = (...names: (string | false | null | undefined)[]) =>
+  names.filter(Boolean).join(' ');

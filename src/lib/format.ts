@@ -1,70 +1,91 @@
-/** Narrow no-break space between figure and unit, and between groups of three. */
-export const NARROW = '\u202F';
-export const MINUS = '\u2212';
-/** What stands where a value is missing. */
+/** U+202F, between a figure and its unit and between thousands. */
+const THIN = '\u202F';
 export const MISSING = '—';
 
-type Value = number | null | undefined;
-
-const isNumber = (value: Value): value is number => typeof value === 'number' && isFinite(value);
-
-/** Groups of three from five digits on: 7093 stays whole, 12 400 does not. */
-function grouped(digits: string): string {
-  return digits.length < 5 ? digits : digits.replace(/\B(?=(\d{3})+$)/g, NARROW);
+/** A number for people: fixed decimals, true minus, thin spaces between thousands; an em dash for none. */
+export function formatNumber(value: number | null | undefined, decimals = 1): string {
+  if (value === null || value === undefined || !Number.isFinite(value)) return MISSING;
+  const fixed = Math.abs(value).toFixed(decimals);
+  const [whole = '', fraction] = fixed.split('.');
+  const grouped = whole.length > 4 ? whole.replace(/\B(?=(\d{3})+$)/g, THIN) : whole;
+  const sign = value < 0 && Number(fixed) !== 0 ? '\u2212' : '';
+  return `${sign}${grouped}${fraction === undefined ? '' : `.${fraction}`}`;
 }
 
-/**
- * A figure as the screen shows it: fixed digits, true minus, an em dash when there is none. Without
- * `digits` the shortest form with at most six significant digits. The stored number is never touched.
- */
-export function formatNumber(value: Value, digits?: number): string {
-  if (!isNumber(value)) return MISSING;
-  const text = digits === undefined ? shortest(Math.abs(value)) : Math.abs(value).toFixed(digits);
-  const [whole = '', fraction] = text.split('.');
-  const figure = grouped(whole) + (fraction === undefined ? '' : `.${fraction}`);
-  return value < 0 && /[1-9]/.test(text) ? MINUS + figure : figure;
+/** With as many digits as a spread supports: 3 significant ones unless told. */
+export function formatSignificant(value: number | null | undefined, digits = 3): string {
+  if (value === null || value === undefined || !Number.isFinite(value)) return MISSING;
+  if (value === 0) return '0';
+  const magnitude = Math.floor(Math.log10(Math.abs(value)));
+  if (magnitude >= 6 || magnitude < -4)
+    return value.toExponential(digits - 1).replace('-', '\u2212');
+  return formatNumber(value, Math.max(0, digits - 1 - magnitude));
 }
 
-function shortest(value: number): string {
-  const rounded = Number(value.toPrecision(6));
-  return rounded !== 0 && (rounded < 1e-6 || rounded >= 1e15)
-    ? rounded.toExponential()
-    : String(rounded);
+/** A setting or limit as it was entered: no more digits than it has. */
+export function formatPlain(value: number | null | undefined): string {
+  if (value === null || value === undefined || !Number.isFinite(value)) return MISSING;
+  return String(Number(value.toPrecision(12))).replace('-', '\u2212');
 }
 
-/** With its sign always: +6.9, −1.2, 0.0. */
-export function formatSigned(value: Value, digits?: number): string {
-  const figure = formatNumber(value, digits);
-  return isNumber(value) && value > 0 && /[1-9]/.test(figure) ? `+${figure}` : figure;
+export function withUnit(figure: string, unit: string): string {
+  return unit === '' || figure === MISSING ? figure : `${figure}${THIN}${unit}`;
 }
 
-/** “84.6 %” with a narrow no-break space; no unit after a missing value. */
-export function formatQuantity(value: Value, unit: string, digits?: number): string {
-  const figure = formatNumber(value, digits);
-  return unit === '' || !isNumber(value) ? figure : figure + NARROW + unit;
+/** "80.1 to 89.0". */
+export function formatInterval(
+  low: number | null | undefined,
+  high: number | null | undefined,
+  decimals = 1,
+): string {
+  if (low === null || low === undefined || high === null || high === undefined) return MISSING;
+  return `${formatNumber(low, decimals)} to ${formatNumber(high, decimals)}`;
 }
 
-/** “80.1 to 89.0”, an em dash when an end is missing. */
-export function formatInterval(low: Value, high: Value, digits?: number): string {
-  if (!isNumber(low) || !isNumber(high)) return MISSING;
-  return `${formatNumber(low, digits)} to ${formatNumber(high, digits)}`;
+export function formatP(p: number | null | undefined): string {
+  if (p === null || p === undefined) return MISSING;
+  if (p < 0.0001) return '< 0.0001';
+  return p < 0.01 ? p.toFixed(4) : p.toFixed(3);
 }
 
-/** Grams below a kilogram, kilograms from there on. */
-export function formatMass(massG: Value): string {
-  if (!isNumber(massG)) return MISSING;
-  return Math.abs(massG) < 1000
-    ? formatQuantity(massG, 'g', Number.isInteger(massG) ? 0 : 2)
-    : formatQuantity(massG / 1000, 'kg', 2);
+/** Grams below a kilogram, kilograms above. */
+export function formatMass(massG: number): string {
+  return massG >= 1000
+    ? withUnit(formatNumber(massG / 1000, 2), 'kg')
+    : withUnit(formatPlain(Math.round(massG * 100) / 100), 'g');
 }
 
-/** Tail probabilities: four decimals, and “< 0.0001” below that. */
-export function formatProbability(value: Value): string {
-  if (isNumber(value) && value < 0.0001) return `<${NARROW}0.0001`;
-  return formatNumber(value, 4);
+/** "12 h 06 min" or "35 s". */
+export function formatDuration(seconds: number): string {
+  if (seconds < 90) return withUnit(formatNumber(seconds, 0), 's');
+  const minutes = Math.round(seconds / 60);
+  if (minutes < 60) return withUnit(String(minutes), 'min');
+  const rest = String(minutes % 60).padStart(2, '0');
+  return `${withUnit(String(Math.floor(minutes / 60)), 'h')} ${withUnit(rest, 'min')}`;
 }
 
-/** A share between 0 and 1 as per cent. */
-export function formatPercent(share: Value, digits = 0): string {
-  return formatQuantity(isNumber(share) ? share * 100 : share, '%', digits);
+/** Sieve sizes: mm, and µm under 0.1 mm; 0 is the pan. */
+export function formatAperture(apertureMm: number): string {
+  if (apertureMm === 0) return 'pan';
+  return apertureMm < 0.1
+    ? withUnit(formatPlain(Math.round(apertureMm * 1e6) / 1000), 'µm')
+    : withUnit(formatPlain(apertureMm), 'mm');
+}
+
+const DAY = new Intl.DateTimeFormat('en-GB', { day: 'numeric', month: 'long', year: 'numeric' });
+const MOMENT = new Intl.DateTimeFormat('en-GB', {
+  day: 'numeric',
+  month: 'short',
+  year: 'numeric',
+  hour: '2-digit',
+  minute: '2-digit',
+});
+export const formatDay = (iso: string) => DAY.format(new Date(iso));
+export const formatMoment = (iso: string) => MOMENT.format(new Date(iso));
+
+/** Decimals that a response's unit and size ask for. */
+export function decimalsFor(value: number | null): number {
+  if (value === null) return 1;
+  const size = Math.abs(value);
+  return size >= 100 ? 0 : size >= 10 ? 1 : 2;
 }

@@ -1,50 +1,39 @@
 export type Theme = 'light' | 'dark';
 
-const CHOSEN = 'cragline.theme';
+const KEY = 'cragline-theme';
 const listeners = new Set<() => void>();
 
-const isTheme = (text: string | null | undefined): text is Theme =>
-  text === 'light' || text === 'dark';
-
-export function rememberedTheme(key: string): Theme | null {
-  const text = localStorage.getItem(key);
-  return isTheme(text) ? text : null;
+function stored(): Theme | null {
+  try {
+    const value = localStorage.getItem(KEY);
+    return value === 'light' || value === 'dark' ? value : null;
+  } catch {
+    // private windows may refuse storage; the system's preference stands
+    return null;
+  }
 }
 
-function systemTheme(): Theme {
-  return window.matchMedia('(prefers-color-scheme: dark)').matches ? 'dark' : 'light';
+/** The theme in force: the person’s choice, else the system’s preference. */
+export function currentTheme(): Theme {
+  return stored() ?? (window.matchMedia('(prefers-color-scheme: dark)').matches ? 'dark' : 'light');
 }
 
-/** What the page shows: what was put on the document, else the system's. */
-export function shownTheme(): Theme {
-  const shown = document.documentElement.dataset['theme'];
-  return isTheme(shown) ? shown : systemTheme();
+export function applyTheme(): void {
+  document.documentElement.dataset['theme'] = currentTheme();
 }
 
-/** Puts a theme on the document, dialogs included; null leaves it to the system. */
-export function showTheme(theme: Theme | null): void {
-  if (theme) document.documentElement.dataset['theme'] = theme;
-  else delete document.documentElement.dataset['theme'];
-  listeners.forEach((listener) => listener());
+export function chooseTheme(theme: Theme): void {
+  try {
+    localStorage.setItem(KEY, theme);
+  } catch {
+    // it holds for this page only, then
+  }
+  document.documentElement.dataset['theme'] = theme;
+  for (const listener of listeners) listener();
 }
 
-/** Shows the remembered choice; called once before the first render, and when the bench is left. */
-export function restoreTheme(): void {
-  showTheme(rememberedTheme(CHOSEN));
-}
-
-/** Shows and remembers. It is the browser's, not the person's: tablets are shared. */
-export function chooseTheme(theme: Theme, key = CHOSEN): void {
-  localStorage.setItem(key, theme);
-  showTheme(theme);
-}
-
-export function onThemeChanged(listener: () => void): () => void {
-  const scheme = window.matchMedia('(prefers-color-scheme: dark)');
+/** For `useSyncExternalStore`: charts read their colours anew when the theme changes. */
+export function onThemeChange(listener: () => void): () => void {
   listeners.add(listener);
-  scheme.addEventListener('change', listener);
-  return () => {
-    listeners.delete(listener);
-    scheme.removeEventListener('change', listener);
-  };
+  return () => listeners.delete(listener);
 }

@@ -1,6 +1,6 @@
-import { useRef, useState, type KeyboardEvent, type PointerEvent, type ReactNode } from 'react';
+import { useRef, useState, type KeyboardEvent, type PointerEvent } from 'react';
 import { useSettled } from '@/hooks/useSettled';
-import { Chart } from '../Chart';
+import { Drawing } from '../Drawing';
 import type { Point } from '../geometry';
 import { contourMapOption, mapFrame } from './contourMapOption';
 import { moveOf, type MapMove } from './mapKeys';
@@ -14,16 +14,14 @@ export interface MapHandlers {
   readonly onPlaced: (setting: Setting) => void;
   /** S swings the section. */
   readonly onSwung: () => void;
-  /** T shows the table, and T again the map. */
+  /** T shows the table. */
   readonly onTableAsked: () => void;
 }
 
 interface ContourMapProps extends MapHandlers {
   readonly map: MapInput;
   readonly label: string;
-  readonly table: ReactNode;
   readonly height: number;
-  readonly isTable?: boolean;
   /** The set-point with its numbers in a sentence: read out after 300 ms, shown above the finger. */
   readonly reading: string;
 }
@@ -35,7 +33,7 @@ const ABOVE_FINGER = 44;
 
 /** The map as something to steer: with keys, with a tap, or by dragging. */
 export function ContourMap(props: ContourMapProps) {
-  const { map, label, table, height, isTable = false, reading } = props;
+  const { map, label, height, reading } = props;
   const [focused, setFocused] = useState<MapRun | null>(null);
   const announced = useSettled(reading, SETTLED_MS);
   const { ref, finger, ...pointer } = useMapPointer({ ...props, onHovered: setFocused });
@@ -57,16 +55,10 @@ export function ContourMap(props: ContourMapProps) {
         aria-label={`${label}. ${KEYS}`}
         tabIndex={0}
         onKeyDown={onKeyDown}
-        {...(isTable ? {} : pointer)}
-        className={isTable ? undefined : 'relative cursor-crosshair touch-none select-none'}
+        {...pointer}
+        className="relative cursor-crosshair touch-none select-none"
       >
-        <Chart
-          label={label}
-          table={table}
-          height={height}
-          isTable={isTable}
-          option={(tokens, size) => contourMapOption(input, tokens, size)}
-        />
+        <Drawing height={height} option={(tokens, size) => contourMapOption(input, tokens, size)} />
         {finger && (
           <div
             aria-hidden="true"

@@ -1,6 +1,6 @@
 import type { ReactNode } from 'react';
 import { RunRing } from '@/components/RunRing';
-import { formatNumber } from '@/lib/format';
+import { formatPlain } from '@/lib/format';
 import { fieldOf } from './field';
 import type { MapInput } from './mapInput';
 
@@ -20,16 +20,16 @@ const BAND_FILLS = [
 function Bands({ map }: { map: MapInput }) {
   const { limits } = fieldOf(map).bands;
   return (
-    <div className="w-full text-1 text-ink-3 sm:w-64" aria-hidden="true">
+    <div className="w-full text-1 text-ink-3 phone:w-auto" aria-hidden="true">
       <div className="grid grid-cols-9 border border-line-strong">
         {BAND_FILLS.map((fill) => (
-          <span key={fill} className={`h-2.5 ${fill}`} />
+          <span key={fill} className={`h-3 phone:w-6 ${fill}`} />
         ))}
       </div>
       <div className="grid grid-cols-9">
         {limits.map((limit) => (
           <span key={limit} className="translate-x-1/2 text-center">
-            {formatNumber(limit)}
+            {formatPlain(limit)}
           </span>
         ))}
       </div>
@@ -88,7 +88,7 @@ export function MapLegend({ map }: { map: MapInput }) {
 
 function Key({ children, words }: { children: ReactNode; words: string }) {
   return (
-    <span className="inline-flex items-center gap-1.5 whitespace-nowrap">
+    <span className="inline-flex items-center gap-2 whitespace-nowrap">
       {children}
       {words}
     </span>

@@ -4,7 +4,7 @@ import { withGap, type Point, type Polyline } from '../geometry';
 import { placeLabel, type Obstacle, type PlacedLabel } from '../labels';
 import { group, line, path, text, type Shape } from '../shapes';
 import { teeth } from '../teeth';
-import { formatNumber } from '@/lib/format';
+import { formatPlain } from '@/lib/format';
 import { isSettable, linesOf, settableRings, valueUnder, type Field } from './field';
 import type { MapGoal, Scene } from './mapInput';
 
@@ -63,7 +63,7 @@ function drawIsoline(limit: number, drawing: Drawing) {
   const weight = isIndex(field.bands, limit)
     ? { lineWidth: 1.3 }
     : { lineWidth: 0.8, opacity: 0.8 };
-  const words = formatNumber(limit);
+  const words = formatPlain(limit);
   for (const points of linesOf(input.z, limit, field, frame)) {
     const label = placeLabel(points, { text: words, ...drawing });
     for (const part of gapped(points, label)) drawing.lines.push(line(part, { stroke, ...weight }));

@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import type { Point } from '@/charts/geometry';
 import { dotPath, hatchPath } from '@/charts/hatch';
 import { ringFill, rosette } from '@/charts/ring';
-import { pegsOf, slabScale, type SlabInput } from '@/charts/slab';
+import { onSlab, stacksOf } from '@/charts/slab';
 import { stepAside } from '@/charts/stepAside';
 import { teeth } from '@/charts/teeth';
 import { roundTicks } from '@/charts/ticks';
@@ -108,32 +108,20 @@ describe('ticks', () => {
 });
 
 describe('pegs', () => {
-  const slab: SlabInput = {
-    x: { low: 16, high: 34 },
-    y: { low: 130, high: 180 },
-    z: { low: 20, high: 60 },
-    settable: [],
-    pegs: [
-      { x: 25, y: 155, z: 35, isSettable: true },
-      { x: 25, y: 155, z: 35, isSettable: true },
-      { x: 25, y: 155, z: 60, isSettable: true },
-      { x: 16, y: 180, z: 20, isSettable: false },
-    ],
-  };
+  const peg = (x: number, y: number, z: number, count = 1) => ({ x, y, z, count, isBroken: false });
 
-  it('gather runs of one place and count repeats', () => {
-    const [far, near] = pegsOf(slab.pegs);
-    expect(far).toMatchObject({ x: 16, y: 180, isSettable: false });
-    expect(near!.heads).toEqual([
-      { z: 35, count: 2 },
-      { z: 60, count: 1 },
+  it('share a stick above one place, the far ones first', () => {
+    const [far, near] = stacksOf([peg(0.5, 0.2, 1), peg(0.5, 0.2, 0, 2), peg(0, 1, 0.5)]);
+    expect(far).toMatchObject({ x: 0, y: 1 });
+    expect(near!.heads.map(({ z, count }) => [z, count])).toEqual([
+      [0, 2],
+      [1, 1],
     ]);
   });
 
-  it('stand higher for more pulses, and deep voltage lies higher on the page', () => {
-    const at = slabScale(slab, { width: 300, height: 170 });
-    expect(at(25, 155, 60)[1]).toBeLessThan(at(25, 155, 20)[1]);
-    expect(at(25, 180)[1]).toBeLessThan(at(25, 130)[1]);
-    expect(at(16, 130)[0]).toBe(8);
+  it('stand higher for more pulses, and what lies deep lies higher on the page', () => {
+    expect(onSlab(0.5, 0.5, 1)[1]).toBeLessThan(onSlab(0.5, 0.5, 0)[1]);
+    expect(onSlab(0.5, 0.5, 0)[1]).toBeLessThan(onSlab(0.5, 0.5)[1]);
+    expect(onSlab(0.5, 1)[1]).toBeLessThan(onSlab(0.5, 0)[1]);
   });
 });

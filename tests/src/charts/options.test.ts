@@ -20,8 +20,8 @@ import {
   SIEVE_CURVE,
   SPREADS,
   TRADE_OFF,
-} from '@/components/gallery/sampleCharts';
-import { SAMPLE_MAP } from '@/components/gallery/sampleMap';
+} from './sampleCharts';
+import { SAMPLE_MAP } from './sampleMap';
 
 echarts.use([CustomChart, GridComponent, SVGRenderer]);
 
@@ -45,8 +45,8 @@ const OPTIONS: Readonly<Record<string, () => EChartsCoreOption>> = {
   sieve: () => sieveCurveOption(SIEVE_CURVE, tokens, size),
   residuals: () =>
     residualOption({ name: 'quantile', points: AGAINST_NORMAL, band: NORMAL_BAND }, tokens, size),
-  influence: () => influenceOption(INFLUENCE, tokens, size),
-  spread: () => spreadCurveOption(SPREADS, tokens, size),
+  influence: () => influenceOption(INFLUENCE, tokens),
+  spread: () => spreadCurveOption(SPREADS, tokens),
   tradeOff: () => tradeOffOption(TRADE_OFF, tokens, size),
 };
 
