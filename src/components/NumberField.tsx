@@ -22,10 +22,13 @@ export function NumberField<Form extends FieldValues>({
   disabled = false,
   ...frame
 }: NumberFieldProps<Form>) {
-  const { field, fieldState } = useController({ control, name });
+  const {
+    field: { ref, name: fieldName, value, onChange: onValue, onBlur },
+    fieldState,
+  } = useController({ control, name });
   const [text, setText] = useState(() =>
-    typeof field.value === 'number' && Number.isFinite(field.value)
-      ? formatPlain(field.value).replace('\u2212', '-')
+    typeof value === 'number' && Number.isFinite(value)
+      ? formatPlain(value).replace('\u2212', '-')
       : '',
   );
   const [hasLeft, setHasLeft] = useState(false);
@@ -33,7 +36,7 @@ export function NumberField<Form extends FieldValues>({
   const onChange = (typed: string) => {
     setText(typed);
     const now = readNumber(typed, unit);
-    field.onChange(now.kind === 'number' ? now.value : now.kind === 'empty' ? null : NaN);
+    onValue(now.kind === 'number' ? now.value : now.kind === 'empty' ? null : NaN);
   };
   const own = reading.kind === 'problem' && hasLeft ? reading.message : undefined;
   const error = own ?? fieldState.error?.message;
@@ -45,14 +48,14 @@ export function NumberField<Form extends FieldValues>({
       hint={note ?? hint}
       error={error}
       inputMode="decimal"
-      name={field.name}
-      ref={field.ref}
+      name={fieldName}
+      ref={ref}
       value={text}
       disabled={disabled}
       onChange={(event) => onChange(event.target.value)}
       onBlur={() => {
         setHasLeft(true);
-        field.onBlur();
+        onBlur();
       }}
     />
   );

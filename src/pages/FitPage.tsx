@@ -1,7 +1,9 @@
 import { studyPolicy } from '@shared/policies/study';
+import type { FitJson } from '@shared/schemas/fit';
 import { isComputed } from '@shared/schemas/response';
 import type { StudyJson } from '@shared/schemas/study';
 import { useQuery } from '@tanstack/react-query';
+import type { ComponentProps } from 'react';
 import { useSearchParams } from 'react-router-dom';
 import { LinkButton } from '@/components/Button';
 import { Segments } from '@/components/Segments';
@@ -14,19 +16,60 @@ import { runQueries } from '@/queries/runs';
 import { factsOf } from './facts';
 import { WithStudy } from './WithStudy';
 
-function Fit({ study }: { readonly study: StudyJson }) {
+interface ReadyProps {
+  readonly study: StudyJson;
+  readonly evidence: ComponentProps<typeof FitWorkbench>['evidence'];
+  readonly fits: readonly FitJson[];
+}
+
+/** The workbench of the response in the address. */
+function Ready({ study, evidence, fits }: ReadyProps) {
   const why = studyPolicy.fit(useActor(), factsOf(study));
   const [search, setSearch] = useSearchParams();
-  const { brief, rig, matrix } = study;
+  const modelled = evidence.brief.responses.filter((response) => !isComputed(response));
+  const response = modelled.find(({ key }) => key === search.get('response')) ?? modelled[0];
+  if (!response)
+    return (
+      <EmptyState title="Nothing to model here">
+        Every response of this study follows exactly from the settings.
+      </EmptyState>
+    );
+  const kept = fits.find((fit) => fit.responseKey === response.key && fit.isKept) ?? null;
+  return (
+    <>
+      <div className="flex flex-wrap gap-4 items-center">
+        <Segments
+          label="Response"
+          value={response.key}
+          options={modelled.map(({ key, name }) => ({ value: key, label: name }))}
+          onChange={(key) => setSearch({ response: key }, { replace: true })}
+        />
+        {study.progress.runsPlanned > 0 && (
+          <span className="text-2 text-ink-3">
+            {study.progress.runsPlanned} runs are still open: what is fitted now is a look ahead.
+          </span>
+        )}
+      </div>
+      <FitWorkbench
+        key={`${response.key} ${kept?.id ?? 0}`}
+        studyId={study.id}
+        evidence={evidence}
+        response={response}
+        kept={kept}
+        why={why}
+      />
+    </>
+  );
+}
+
+function Fit({ study }: { readonly study: StudyJson }) {
+  const { brief, rig, matrix, progress } = study;
   const hasRuns = matrix !== null;
   const runs = useQuery({ ...runQueries.ofStudy(study.id), enabled: hasRuns });
   const fits = useQuery({ ...fitQueries.ofStudy(study.id), enabled: hasRuns });
   const error = runs.error ?? fits.error;
-  const modelled = brief?.responses.filter((response) => !isComputed(response)) ?? [];
-  const response = modelled.find(({ key }) => key === search.get('response')) ?? modelled[0];
-  const recorded = runs.data?.filter(({ status }) => status === 'recorded').length ?? 0;
-  const isDone =
-    study.progress.modelsNeeded > 0 && study.progress.modelsKept >= study.progress.modelsNeeded;
+  const isDone = progress.modelsNeeded > 0 && progress.modelsKept >= progress.modelsNeeded;
+  const isReady = brief && rig && runs.data && fits.data;
   return (
     <StudyFrame
       study={study}
@@ -34,7 +77,7 @@ function Fit({ study }: { readonly study: StudyJson }) {
       action={isDone && <LinkButton to={`/studies/${study.id}/map`}>To the map</LinkButton>}
     >
       {error && <ErrorState error={error} />}
-      {(!hasRuns || (runs.data && recorded === 0)) && (
+      {progress.runsRecorded === 0 && (
         <EmptyState
           title="There is nothing to fit yet"
           action={<LinkButton to={`/studies/${study.id}/bench`}>To the bench</LinkButton>}
@@ -42,32 +85,13 @@ function Fit({ study }: { readonly study: StudyJson }) {
           A model needs recorded runs.
         </EmptyState>
       )}
-      {hasRuns && (!runs.data || !fits.data) && !error && <LoadingState what="Reading the runs." />}
-      {brief && rig && response && runs.data && fits.data && recorded > 0 && (
-        <>
-          <div className="flex flex-wrap gap-4 items-center">
-            <Segments
-              label="Response"
-              value={response.key}
-              options={modelled.map(({ key, name }) => ({ value: key, label: name }))}
-              onChange={(key) => setSearch({ response: key }, { replace: true })}
-            />
-            {study.progress.runsPlanned > 0 && (
-              <span className="text-2 text-ink-3">
-                {study.progress.runsPlanned} runs are still open: what is fitted now is a look
-                ahead.
-              </span>
-            )}
-          </div>
-          <FitWorkbench
-            key={`${response.key} ${fits.data.find((fit) => fit.responseKey === response.key && fit.isKept)?.id ?? 0}`}
-            studyId={study.id}
-            evidence={{ brief, envelope: rig.envelope, runs: runs.data }}
-            response={response}
-            kept={fits.data.find((fit) => fit.responseKey === response.key && fit.isKept) ?? null}
-            why={why}
-          />
-        </>
+      {hasRuns && !isReady && !error && <LoadingState what="Reading the runs." />}
+      {isReady && progress.runsRecorded > 0 && (
+        <Ready
+          study={study}
+          evidence={{ brief, envelope: rig.envelope, runs: runs.data }}
+          fits={fits.data}
+        />
       )}
     </StudyFrame>
   );

@@ -3,7 +3,7 @@ import { optimalDesign } from '../../stats/design/optimal';
 import { regionOf } from '../../stats/design/region';
 import { cholesky, gramOf, inverseOf } from '../../stats/linalg/cholesky';
 import { fromCoded } from '../../stats/coding/code';
-import { isCategorical, type Settings } from '../../stats/coding/factor';
+import { isCategorical, type Setting, type Settings } from '../../stats/coding/factor';
 import { snap } from '../../stats/coding/snap';
 import { pointOf, type Point } from '../../stats/model/modelMatrix';
 import type { NextBasis, NextRuns } from './basis';
@@ -38,8 +38,10 @@ export function augment(basis: NextBasis): NextRuns {
     Object.fromEntries(
       factors.map((factor, i) => {
         const x = point[i]!;
-        if (isCategorical(factor)) return [factor.key, factor.levels[x]!];
-        return [factor.key, snap(factor, Number(fromCoded(factor, x).toPrecision(12)))];
+        const value: Setting = isCategorical(factor)
+          ? factor.levels[x]!
+          : snap(factor, Number(fromCoded(factor, x).toPrecision(12)));
+        return [factor.key, value] as const;
       }),
     ),
   );

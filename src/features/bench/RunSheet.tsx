@@ -41,9 +41,102 @@ function whyAsked(run: RunJson, firstNumber: number | null): string | null {
     : null;
 }
 
+interface CheckStepProps extends RunSheetProps {
+  readonly form: RunForm;
+  readonly onChange: (changes: Partial<RunForm>) => void;
+  readonly onNext: () => void;
+  readonly onVoid: () => void;
+}
+
+/** What to dial in, what to check first, and the cautions. */
+function CheckStep({
+  brief,
+  envelope,
+  run,
+  before,
+  form,
+  onChange,
+  onNext,
+  onVoid,
+}: CheckStepProps) {
+  const open = PRE_RUN_CHECKS.length - form.checks.length;
+  return (
+    <div className="grid gap-4 desk:grid-cols-[minmax(0,1fr)_24rem]">
+      <SetPointTiles
+        settings={run.settings}
+        before={before?.settings ?? null}
+        envelope={envelope}
+        massG={brief.batchMassG}
+      />
+      <div className="grid gap-4 content-start">
+        <Checks done={form.checks} onChange={(checks) => onChange({ checks })} />
+        <Button look="primary" size="bench" disabled={open > 0} onClick={onNext}>
+          {open > 0 ? `${open} check${open > 1 ? 's' : ''} to go` : 'Checked: on to the record'}
+        </Button>
+        <Button look="quiet" onClick={onVoid}>
+          Cannot run this one …
+        </Button>
+      </div>
+      <div className="col-span-full">
+        <Cautions />
+      </div>
+    </div>
+  );
+}
+
+interface SieveStepProps {
+  readonly brief: BriefJson;
+  readonly form: RunForm;
+  readonly problems: RunProblems;
+  readonly closeWords: string;
+  readonly isBusy: boolean;
+  readonly onChange: (changes: Partial<RunForm>) => void;
+  readonly onClose: () => void;
+}
+
+/** Masses, both balances and the curve, all as they are typed. */
+function SieveStep(props: SieveStepProps) {
+  const { brief, form, problems, closeWords, isBusy, onChange, onClose } = props;
+  const sieve = liveSieve(form, brief);
+  return (
+    <div className="grid gap-6 desk:grid-cols-2 items-start">
+      <div className="grid gap-4">
+        <SieveGrid
+          aperturesMm={brief.sieveStack.aperturesMm}
+          values={form.sieves}
+          problems={problems}
+          percents={Object.fromEntries(
+            (sieve?.table ?? []).map(({ apertureMm, retainedPercent }) => [
+              String(apertureMm),
+              retainedPercent,
+            ]),
+          )}
+          onChange={(sieves) => onChange({ sieves })}
+        />
+        {problems['sieves'] !== undefined && <Notice tone="stop">{problems['sieves']}</Notice>}
+        <Balances
+          treatment={sieve?.balance.treatment ?? null}
+          sieving={sieve?.balance.sieving ?? null}
+          shape={sieve?.shape ?? []}
+        />
+      </div>
+      <div className="grid gap-4">
+        {sieve ? (
+          <SieveReading sieve={sieve} brief={brief} />
+        ) : (
+          <p className="state">The passing curve appears with the dry feed and the first mass.</p>
+        )}
+        <Button look="primary" size="bench" isBusy={isBusy} onClick={onClose}>
+          {closeWords}
+        </Button>
+      </div>
+    </div>
+  );
+}
+
 /** One run from dialling in to the last sieve; what is typed stays on this tablet until it is sent. */
 export function RunSheet(props: RunSheetProps) {
-  const { study, brief, envelope, run, before, firstNumber, onRecorded } = props;
+  const { study, brief, run, firstNumber, onRecorded } = props;
   const empty = formOfRun(run, brief);
   const [form, setForm] = useState<RunForm>(() => readDraft(run.id, empty) ?? empty);
   const [isKept, setIsKept] = useState(true);
@@ -53,8 +146,6 @@ export function RunSheet(props: RunSheetProps) {
   const [version, setVersion] = useState(run.version);
   const [isVoiding, setIsVoiding] = useState(false);
   const recordRun = useRecordRun(study.id);
-  const sieve = liveSieve(form, brief);
-  const open = PRE_RUN_CHECKS.length - form.checks.length;
 
   const change = (changes: Partial<RunForm>) => {
     const next = { ...form, ...changes };
@@ -121,31 +212,13 @@ export function RunSheet(props: RunSheetProps) {
       )}
       {problems['root'] !== undefined && <Notice tone="stop">{problems['root']}</Notice>}
       {step === 'Check' && (
-        <div className="grid gap-4 desk:grid-cols-[minmax(0,1fr)_24rem]">
-          <SetPointTiles
-            settings={run.settings}
-            before={before?.settings ?? null}
-            envelope={envelope}
-            massG={brief.batchMassG}
-          />
-          <div className="grid gap-4 content-start">
-            <Checks done={form.checks} onChange={(checks) => change({ checks })} />
-            <Button
-              look="primary"
-              size="bench"
-              disabled={open > 0}
-              onClick={() => setStep('Record')}
-            >
-              {open > 0 ? `${open} check${open > 1 ? 's' : ''} to go` : 'Checked: on to the record'}
-            </Button>
-            <Button look="quiet" onClick={() => setIsVoiding(true)}>
-              Cannot run this one …
-            </Button>
-          </div>
-          <div className="col-span-full">
-            <Cautions />
-          </div>
-        </div>
+        <CheckStep
+          {...props}
+          form={form}
+          onChange={change}
+          onNext={() => setStep('Record')}
+          onVoid={() => setIsVoiding(true)}
+        />
       )}
       {step === 'Record' && (
         <>
@@ -154,8 +227,9 @@ export function RunSheet(props: RunSheetProps) {
             problems={problems}
             brief={brief}
             asksWhy={
-              whyAsked(run, firstNumber) ??
-              (theirs || version !== run.version ? 'It was recorded meanwhile.' : null)
+              version === run.version
+                ? whyAsked(run, firstNumber)
+                : 'It was recorded meanwhile: say why it is changed.'
             }
             onChange={change}
           />
@@ -165,45 +239,15 @@ export function RunSheet(props: RunSheetProps) {
         </>
       )}
       {step === 'Sieve' && (
-        <div className="grid gap-6 desk:grid-cols-2 items-start">
-          <div className="grid gap-4">
-            <SieveGrid
-              aperturesMm={brief.sieveStack.aperturesMm}
-              values={form.sieves}
-              problems={problems}
-              percents={Object.fromEntries(
-                (sieve?.table ?? []).map(({ apertureMm, retainedPercent }) => [
-                  String(apertureMm),
-                  retainedPercent,
-                ]),
-              )}
-              onChange={(sieves) => change({ sieves })}
-            />
-            {problems['sieves'] !== undefined && <Notice tone="stop">{problems['sieves']}</Notice>}
-            <Balances
-              treatment={sieve?.balance.treatment ?? null}
-              sieving={sieve?.balance.sieving ?? null}
-              shape={sieve?.shape ?? []}
-            />
-          </div>
-          <div className="grid gap-4">
-            {sieve ? (
-              <SieveReading sieve={sieve} brief={brief} />
-            ) : (
-              <p className="state">
-                The passing curve appears with the dry feed and the first mass.
-              </p>
-            )}
-            <Button
-              look="primary"
-              size="bench"
-              isBusy={recordRun.isPending}
-              onClick={() => void onRecord()}
-            >
-              {run.status === 'recorded' ? 'Save the correction' : `Close run ${run.number}`}
-            </Button>
-          </div>
-        </div>
+        <SieveStep
+          brief={brief}
+          form={form}
+          problems={problems}
+          closeWords={run.status === 'recorded' ? 'Save the correction' : `Close run ${run.number}`}
+          isBusy={recordRun.isPending}
+          onChange={change}
+          onClose={() => void onRecord()}
+        />
       )}
       <p className="text-2 text-ink-3" aria-live="polite">
         {isKept

@@ -66,8 +66,8 @@ export function BriefEditor({ study, rigs, stacks, onSaved }: BriefEditorProps) 
   const rigId = useWatch({ control, name: 'rigId' });
   const stackId = useWatch({ control, name: 'sieveStackId' });
   const responses = useWatch({ control, name: 'responses' });
-  const rig = rigs.find(({ id }) => id === Number(rigId)) ?? rigs[0];
-  const stack = stacks.find(({ id }) => id === Number(stackId));
+  const rig = rigs.find(({ id }) => id === rigId) ?? rigs[0];
+  const stack = stacks.find(({ id }) => id === stackId);
 
   const show = (issues: readonly { path: string; message: string }[], form: BriefForm) => {
     for (const { path, message } of issues)

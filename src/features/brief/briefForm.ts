@@ -53,16 +53,13 @@ function setPointForm(
   brief: StudyJson['brief'],
   envelope: EnvelopeJson,
 ): SetPointForm {
+  const scale = key === 'pulses' ? 'log' : 'linear';
+  const nothing: SetPointForm = { use: 'varied', low: null, high: null, scale, held: null };
   const factor = brief?.factors.find((each) => each.key === key);
-  const held = brief?.fixed[key] ?? null;
-  const isHeld = brief ? held !== null : key === 'frequency';
-  return {
-    use: isHeld ? 'held' : 'varied',
-    low: factor?.low ?? null,
-    high: factor?.high ?? null,
-    scale: factor?.scale ?? (key === 'pulses' ? 'log' : 'linear'),
-    held: held ?? (isHeld ? middle(envelope[key]) : null),
-  };
+  if (factor) return { ...nothing, low: factor.low, high: factor.high, scale: factor.scale };
+  const isHeld = brief !== null || key === 'frequency';
+  if (!isHeld) return nothing;
+  return { ...nothing, use: 'held', held: brief?.fixed[key] ?? middle(envelope[key]) };
 }
 
 /** The form of a study’s Brief: what was saved, or a sensible start. */
@@ -89,14 +86,33 @@ export function formOf(
     responses: brief
       ? brief.responses.map((response) => ({ ...response }))
       : [newResponse('passing', []), newResponse('specificEnergy', [])],
-    batchMassG: brief?.batchMassG ?? 300,
-    handlingMinutes: brief?.handlingMinutes ?? 30,
-    massLimitG: brief?.massLimitG ?? null,
-    runLimit: brief?.runLimit ?? null,
-    dayLimit: brief?.dayLimit ?? null,
-    effectThatMatters: brief?.effectThatMatters ?? null,
-    expectedSpread: brief?.expectedSpread ?? null,
+    ...numbersOf(brief),
     practiceMaterial: brief?.practiceMaterial ?? '',
+  };
+}
+
+/** The plain numbers of a Brief; a bag of 300 g and half an hour are a usual start. */
+function numbersOf(brief: StudyJson['brief']) {
+  const start = {
+    batchMassG: 300,
+    handlingMinutes: 30,
+    massLimitG: null,
+    runLimit: null,
+    dayLimit: null,
+    effectThatMatters: null,
+    expectedSpread: null,
+  };
+  if (!brief) return start;
+  const { batchMassG, handlingMinutes, massLimitG, runLimit, dayLimit } = brief;
+  const { effectThatMatters, expectedSpread } = brief;
+  return {
+    batchMassG,
+    handlingMinutes,
+    massLimitG,
+    runLimit,
+    dayLimit,
+    effectThatMatters,
+    expectedSpread,
   };
 }
 

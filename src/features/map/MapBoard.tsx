@@ -1,27 +1,19 @@
-import { fitRequestSchema } from '@shared/schemas/calc/fit';
 import type { RunJson } from '@shared/schemas/run';
 import { setPointOf, type SettingJson, type SetPointKey } from '@shared/schemas/setPoint';
 import { snap } from '@shared/stats/coding/snap';
-import { constraintsOf, variedSettings } from '@shared/study/plan';
-import { chooseRequestOf, fitRequestOf, type Evidence } from '@shared/study/requests';
-import { deliveredSetting } from '@shared/study/results';
-import { useQueries, useQuery } from '@tanstack/react-query';
-import { useDeferredValue, useMemo, useState } from 'react';
-import { ChartFrame } from '@/charts/Chart';
-import { ContourMap } from '@/charts/map/ContourMap';
-import type { MapGoal, MapInput, MapRun } from '@/charts/map/mapInput';
-import { MapLegend } from '@/charts/map/MapLegend';
+import type { Evidence } from '@shared/study/requests';
+import { useDeferredValue, useState } from 'react';
+import type { MapMove } from '@/charts/map/mapKeys';
+import type { MapInput } from '@/charts/map/mapInput';
 import { Notice } from '@/components/Notice';
-import { Panel } from '@/components/Panel';
 import { Segments } from '@/components/Segments';
 import { LoadingState } from '@/components/states';
-import { calculation } from '@/engine/engine';
 import { formatNumber, formatPlain, withUnit } from '@/lib/format';
+import { computedGoals, modelledGoals } from './mapGoals';
+import { latticeOf, rangeOf, sectionEnds } from './mapGrid';
 import {
   axisWords,
-  computedAt,
   dialOf,
-  isOnSlice,
   limitsOf,
   mapAxes,
   middleSetting,
@@ -29,12 +21,17 @@ import {
   predictionAt,
   type MapModel,
 } from './mapModel';
+import { MapPanel } from './MapPanel';
+import { runsOnMap } from './mapRuns';
 import { rigLimitsOn } from './rigLimits';
-import { SectionPanel, type SectionEnds, type SectionWay } from './SectionPanel';
+import { SectionPanel, type SectionWay } from './SectionPanel';
 import { SetPointPanel } from './SetPointPanel';
+import { useChance, useSurfaces } from './useMapCalculations';
 
-const COLUMNS = 61;
-const ROWS = 51;
+interface MapBoardProps {
+  readonly evidence: Evidence & { readonly runs: readonly RunJson[] };
+  readonly models: readonly MapModel[];
+}
 
 const NEXT_WAY: Readonly<Record<SectionWay, SectionWay>> = {
   slanted: 'across',
@@ -42,185 +39,85 @@ const NEXT_WAY: Readonly<Record<SectionWay, SectionWay>> = {
   up: 'slanted',
 };
 
-const mapAxis = (key: SetPointKey) => {
-  const { name, unit } = axisWords(key);
-  return { label: name, unit };
-};
+const settingWords = (keys: readonly SetPointKey[], setting: SettingJson) =>
+  keys.map((key) => withUnit(formatPlain(setting[key]), setPointOf(key).unit)).join(', ');
 
-interface MapBoardProps {
-  readonly evidence: Evidence & { readonly runs: readonly RunJson[] };
-  readonly models: readonly MapModel[];
+/** One scale for each response, wide enough for its runs and limits. */
+function scalesOf({ brief, runs }: MapBoardProps['evidence']) {
+  return Object.fromEntries(
+    brief.responses.map((response) => {
+      const values = runs.flatMap(({ results }) => results[response.key] ?? []);
+      const all = [...values, ...limitsOf(response).map(({ value }) => value)];
+      const [low, high] = [Math.min(...all), Math.max(...all)];
+      const pad = 0.1 * (high - low || 1);
+      return [response.key, [low - pad, high + pad] as const];
+    }),
+  );
 }
 
-const evenly = (low: number, high: number, n: number) =>
-  Array.from({ length: n }, (_, i) => low + ((high - low) * i) / (n - 1));
-
-function rangeOf({ brief }: Evidence, key: SetPointKey): readonly [number, number] {
-  const factor = brief.factors.find((each) => each.key === key);
-  return [factor?.low ?? 0, factor?.high ?? 1];
-}
-
-function sectionEnds(
-  way: SectionWay,
-  x: readonly [number, number],
-  y: readonly [number, number],
-  at: readonly [number, number],
-): SectionEnds {
-  if (way === 'across')
-    return [
-      [x[0], at[1]],
-      [x[1], at[1]],
-    ];
-  if (way === 'up')
-    return [
-      [at[0], y[0]],
-      [at[0], y[1]],
-    ];
-  const inset = (range: readonly [number, number], share: number) =>
-    range[0] + share * (range[1] - range[0]);
-  return [
-    [inset(x, 0.08), inset(y, 0.08)],
-    [inset(x, 0.92), inset(y, 0.96)],
-  ];
+/** The set-point and what moves it: a step of a dial, or a place on the map. */
+function useSetting(evidence: Evidence) {
+  const [setting, setSetting] = useState<SettingJson>(() => middleSetting(evidence));
+  const move = (key: SetPointKey, by: number) => {
+    const values = dialOf(evidence, key);
+    const wished = values.indexOf(setting[key]) + by;
+    const next = values[Math.max(0, Math.min(values.length - 1, wished))];
+    if (next !== undefined) setSetting((was) => ({ ...was, [key]: next }));
+  };
+  const place = (key: SetPointKey, value: number) => {
+    const [low, high] = rangeOf(evidence, key);
+    const inside = Math.max(low, Math.min(high, value));
+    const factor = numericFactors(evidence).find((each) => each.key === key);
+    setSetting((was) => ({ ...was, [key]: factor ? snap(factor, inside) : inside }));
+  };
+  return { setting, setSetting, move, place };
 }
 
 /** The map is the hero: one response over two set-points, with everything that limits it. */
 export function MapBoard({ evidence, models }: MapBoardProps) {
-  const { brief, envelope, runs } = evidence;
+  const { brief, runs } = evidence;
   const [shown, setShown] = useState(models[0]?.response.key ?? '');
-  const [setting, setSetting] = useState<SettingJson>(() => middleSetting(evidence));
   const [way, setWay] = useState<SectionWay>('slanted');
-  const [isTable, setIsTable] = useState(false);
-  const model = models.find(({ response }) => response.key === shown) ?? models[0];
+  const { setting, setSetting, move, place } = useSetting(evidence);
+  const slice = useDeferredValue(setting);
   const axes = mapAxes(evidence);
   const [xKey, yKey] = axes;
-  const [xRange, yRange] = [rangeOf(evidence, xKey), rangeOf(evidence, yKey)];
-  const grid = useMemo(
-    () => ({
-      x: evenly(xRange[0], xRange[1], COLUMNS),
-      y: evenly(yRange[0], yRange[1], ROWS),
-    }),
-    [xRange[0], xRange[1], yRange[0], yRange[1]],
+  const [xLow, xHigh] = rangeOf(evidence, xKey);
+  const [yLow, yHigh] = rangeOf(evidence, yKey);
+  const grid = latticeOf([xLow, xHigh], [yLow, yHigh]);
+  const surfaces = useSurfaces(evidence, models, axes, { grid, slice });
+  const chance = useChance(evidence, models, slice);
+  const at = Math.max(
+    0,
+    models.findIndex(({ response }) => response.key === shown),
   );
-  const others = brief.factors.map(({ key }) => key).filter((key) => !axes.includes(key));
-  const slice = useDeferredValue(setting);
-  const surfaces = useQueries({
-    queries: models.map(({ response, fit }) =>
-      calculation('surface', {
-        fit: fitRequestSchema.parse(fitRequestOf(evidence, response, fit)),
-        constraints: constraintsOf(brief, envelope),
-        x: { key: xKey, values: grid.x },
-        y: { key: yKey, values: grid.y },
-        // the axes are swept: only the others decide the slice
-        at: Object.fromEntries(
-          brief.factors.map(({ key }) => [
-            key,
-            others.includes(key) ? slice[key] : rangeOf(evidence, key)[0],
-          ]),
-        ),
-      }),
-    ),
-  });
-  const choices = Object.fromEntries(models.map(({ response, fit }) => [response.key, fit]));
-  const request = chooseRequestOf(evidence, choices);
-  const { data: chosen } = useQuery(
-    calculation('choose', {
-      ...request,
-      fixed: { ...request.fixed, ...variedSettings(brief, slice) },
-      support: 'region',
-      top: 1,
-    }),
-  );
-  const at = models.findIndex(({ response }) => response.key === model?.response.key);
+  const model = models[at];
+  if (!model) return null;
+  const { response } = model;
   const surface = surfaces[at]?.data;
   const failure = surfaces.find(({ error }) => error)?.error;
-
-  const goals = useMemo((): MapGoal[] => {
-    const modelled = models.flatMap(({ response }, i) => {
-      const values = surfaces[i]?.data?.predicted;
-      return values
-        ? limitsOf(response).map(({ value, holdsAbove }) => ({
-            label: `${response.key === shown ? '' : `${response.name} `}${withUnit(formatPlain(value), response.unit)}`,
-            values,
-            level: value,
-            side: holdsAbove ? ('atLeast' as const) : ('atMost' as const),
-          }))
-        : [];
-    });
-    const exact = brief.responses.flatMap((response) => {
-      if (computedAt(evidence, response, slice) === null) return [];
-      const values = grid.y.map((v) =>
-        grid.x.map((u) => computedAt(evidence, response, { ...slice, [xKey]: u, [yKey]: v }) ?? 0),
-      );
-      return limitsOf(response).map(({ value, holdsAbove }) => ({
-        label: withUnit(formatPlain(value), response.unit),
-        values,
-        level: value,
-        side: holdsAbove ? ('atLeast' as const) : ('atMost' as const),
-      }));
-    });
-    return [...modelled, ...exact];
-  }, [models, surfaces, brief.responses, evidence, slice, grid, xKey, yKey, shown]);
-
-  if (!model) return null;
-  const { response, answer } = model;
-  const mapRuns = runs
-    .filter(
-      ({ status, results }) => status === 'recorded' && (results[response.key] ?? null) !== null,
-    )
-    .map((run): MapRun => {
-      const delivered = deliveredSetting(run.settings, run.actual);
-      const diagnosis = answer.diagnostics.find(({ id }) => String(id) === String(run.number));
-      return {
-        id: run.number,
-        x: delivered[xKey],
-        y: delivered[yKey],
-        residualShare: diagnosis?.studentizedInternal ?? 0,
-        onSlice: isOnSlice(evidence, axes, run, setting),
-      };
-    });
-  const move = (key: SetPointKey, by: number) => {
-    const values = dialOf(evidence, key);
-    const next =
-      values[Math.max(0, Math.min(values.length - 1, values.indexOf(setting[key]) + by))];
-    if (next !== undefined) setSetting((was) => ({ ...was, [key]: next }));
-  };
-  const pick = (u: number, v: number) => {
-    const settled = (key: SetPointKey, value: number, [low, high]: readonly [number, number]) => {
-      const factor = numericFactors(evidence).find((each) => each.key === key);
-      const inside = Math.max(low, Math.min(high, value));
-      return factor ? snap(factor, inside) : inside;
-    };
-    setSetting((was) => ({
-      ...was,
-      [xKey]: settled(xKey, u, xRange),
-      [yKey]: settled(yKey, v, yRange),
-    }));
-  };
-  const scales = Object.fromEntries(
-    brief.responses.map((each) => {
-      const values = runs.flatMap(({ results }) => results[each.key] ?? []);
-      const limits = limitsOf(each).map(({ value }) => value);
-      const all = [...values, ...limits];
-      const [low, high] = [Math.min(...all), Math.max(...all)];
-      const pad = 0.1 * (high - low || 1);
-      return [each.key, [low - pad, high + pad] as const];
-    }),
-  );
-  const ends = sectionEnds(way, xRange, yRange, [setting[xKey], setting[yKey]]);
-  const held = others.map(
-    (key) => `${setPointOf(key).name} ${withUnit(formatPlain(setting[key]), setPointOf(key).unit)}`,
-  );
+  const others = brief.factors.map(({ key }) => key).filter((key) => !axes.includes(key));
+  const ends = sectionEnds(way, [xLow, xHigh], [yLow, yHigh], [setting[xKey], setting[yKey]]);
+  const axis = (key: SetPointKey) => ({ label: axisWords(key).name, unit: axisWords(key).unit });
   const map: MapInput | null = surface
     ? {
-        x: { ...mapAxis(xKey), values: grid.x },
-        y: { ...mapAxis(yKey), values: grid.y },
+        x: { ...axis(xKey), values: grid.x },
+        y: { ...axis(yKey), values: grid.y },
         z: surface.predicted,
         unit: response.unit,
         limits: rigLimitsOn(evidence, axes, grid, slice),
         support: surface.spread,
-        runs: mapRuns,
-        goals,
+        runs: runsOnMap(evidence, model, axes, setting),
+        goals: [
+          ...modelledGoals(
+            models.map((each, i) => ({
+              response: each.response,
+              values: surfaces[i]?.data?.predicted,
+            })),
+            response.key,
+          ),
+          ...computedGoals(evidence, axes, grid, slice),
+        ],
         setPoint: { x: setting[xKey], y: setting[yKey] },
         section: {
           from: { x: ends[0][0], y: ends[0][1] },
@@ -228,32 +125,21 @@ export function MapBoard({ evidence, models }: MapBoardProps) {
         },
       }
     : null;
-  const here = predictionAt(model, evidence, setting);
-  const reading = `${axes
-    .map((key) => withUnit(formatPlain(setting[key]), setPointOf(key).unit))
-    .join(', ')}: ${withUnit(formatNumber(here.predicted, 1), response.unit)}`;
-  const rows = grid.y.flatMap((v, j) =>
-    j % 10 === 0
-      ? grid.x.flatMap((u, i) =>
-          i % 10 === 0
-            ? [
-                {
-                  u,
-                  v,
-                  value: surface?.predicted[j]?.[i] ?? null,
-                  isFeasible: surface?.feasible[j]?.[i] ?? false,
-                },
-              ]
-            : [],
-        )
-      : [],
-  );
+  const { predicted } = predictionAt(model, evidence, setting);
+  const onMoved = ({ dx, dy, dz }: MapMove) => {
+    if (dx !== 0) move(xKey, dx);
+    if (dy !== 0) move(yKey, dy);
+    if (dz !== 0 && others[0]) move(others[0], dz);
+  };
   return (
     <div className="grid gap-4 desk:grid-cols-[minmax(0,1fr)_23rem] items-start">
       <div className="grid gap-4 min-w-0">
-        <Panel
-          name={response.name}
-          fact={`over ${axisWords(xKey).name.toLowerCase()} and ${axisWords(yKey).name.toLowerCase()}${held.length > 0 ? ` at ${held.join(', ')}` : ''}`}
+        <MapPanel
+          response={response}
+          map={map}
+          isFeasible={surface?.feasible ?? []}
+          reading={`${settingWords([yKey, xKey], setting)}: ${withUnit(formatNumber(predicted, 1), response.unit)}`}
+          fact={`over ${axisWords(xKey).name.toLowerCase()} and ${axisWords(yKey).name.toLowerCase()}${others.length > 0 ? ` at ${others.map((key) => `${setPointOf(key).name} ${settingWords([key], setting)}`).join(', ')}` : ''}`}
           control={
             models.length > 1 && (
               <Segments
@@ -267,67 +153,16 @@ export function MapBoard({ evidence, models }: MapBoardProps) {
               />
             )
           }
+          onMoved={onMoved}
+          onPlaced={({ x, y }) => {
+            place(xKey, x);
+            place(yKey, y);
+          }}
+          onSwung={() => setWay(NEXT_WAY[way])}
         >
           {failure && <Notice tone="stop">{failure.message}</Notice>}
           {!surface && !failure && <LoadingState what="Drawing the map." />}
-          {map && (
-            <>
-              <ChartFrame
-                label={`Contour map of ${response.name}`}
-                isInteractive
-                view={{ isTable, onSwitched: setIsTable }}
-                table={{
-                  columns: [
-                    {
-                      key: 'x',
-                      header: axisWords(xKey).name,
-                      unit: axisWords(xKey).unit,
-                      numeric: true,
-                      cell: ({ u }) => formatNumber(u, 1),
-                    },
-                    {
-                      key: 'y',
-                      header: axisWords(yKey).name,
-                      unit: axisWords(yKey).unit,
-                      numeric: true,
-                      cell: ({ v }) => formatNumber(v, 1),
-                    },
-                    {
-                      key: 'z',
-                      header: response.name,
-                      unit: response.unit,
-                      numeric: true,
-                      cell: ({ value }) => formatNumber(value, 1),
-                    },
-                    {
-                      key: 'f',
-                      header: 'Can be dialled in',
-                      cell: ({ isFeasible }) => (isFeasible ? 'yes' : 'no'),
-                    },
-                  ],
-                  rows,
-                  rowKey: ({ u, v }) => `${u} ${v}`,
-                }}
-              >
-                <ContourMap
-                  map={map}
-                  label={`Contour map of ${response.name}`}
-                  height={440}
-                  reading={reading}
-                  onPlaced={({ x, y }) => pick(x, y)}
-                  onMoved={({ dx, dy, dz }) => {
-                    if (dx !== 0) move(xKey, dx);
-                    if (dy !== 0) move(yKey, dy);
-                    if (dz !== 0 && others[0]) move(others[0], dz);
-                  }}
-                  onSwung={() => setWay(NEXT_WAY[way])}
-                  onTableAsked={() => setIsTable(true)}
-                />
-              </ChartFrame>
-              {!isTable && <MapLegend map={map} />}
-            </>
-          )}
-        </Panel>
+        </MapPanel>
         <SectionPanel
           evidence={evidence}
           model={model}
@@ -343,8 +178,8 @@ export function MapBoard({ evidence, models }: MapBoardProps) {
         evidence={evidence}
         models={models}
         setting={setting}
-        chance={chosen?.best[0] ?? null}
-        scales={scales}
+        chance={chance}
+        scales={scalesOf(evidence)}
         onChange={setSetting}
       />
     </div>

@@ -7,6 +7,7 @@ import { Panel } from '@/components/Panel';
 import { Segments } from '@/components/Segments';
 import { formatInterval, formatNumber, withUnit } from '@/lib/format';
 import { limitsOf, predictionAt, type MapModel } from './mapModel';
+import { residualShareOf } from './mapRuns';
 
 export type SectionWay = 'across' | 'up' | 'slanted';
 export type SectionEnds = readonly [readonly [number, number], readonly [number, number]];
@@ -84,13 +85,12 @@ export function SectionPanel(props: SectionPanelProps) {
       [yKey]: a[1] + share * (b[1] - a[1]),
     };
     const residual = value - predictionAt(model, evidence, delivered).predicted;
-    const diagnosis = model.answer.diagnostics.find(({ id }) => String(id) === String(run.number));
     return [
       {
         id: run.number,
         share,
         value: predictionAt(model, evidence, foot).predicted + residual,
-        residualShare: diagnosis?.studentizedInternal ?? 0,
+        residualShare: residualShareOf(model, run),
       },
     ];
   });

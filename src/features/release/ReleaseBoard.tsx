@@ -77,7 +77,7 @@ export function ReleaseBoard(props: ReleaseBoardProps) {
           isFlush
         >
           {error && <Notice tone="stop">{error.message}</Notice>}
-          {isPending && !error && (
+          {isPending && (
             <div className="p-4">
               <LoadingState what="Looking at every settable setting." />
             </div>

@@ -11,7 +11,8 @@ const NOUNS: Readonly<Record<string, string>> = {
 };
 
 function runWords({ after, action }: AuditEventJson): string | null {
-  if (action === 'created') return `planned run ${String(after?.['number'] ?? '')}`;
+  const number = after?.['number'];
+  if (action === 'created') return `planned run ${typeof number === 'number' ? number : ''}`;
   if (after?.['status'] === 'recorded') return 'recorded a run';
   if (after?.['status'] === 'void') return 'marked a run void';
   return null;
