@@ -52,8 +52,14 @@ export function placedRuns(runs: readonly MapRun[], frame: Frame): PlacedRun[] {
 /** Rings and ghosts, as labels must avoid them. */
 export function runObstacles({ input }: Scene, frame: Frame): Obstacle[] {
   const ghosts = input.runs.filter(({ onSlice }) => !onSlice);
+  const rosettes = groupsOf(
+    input.runs.filter(({ onSlice }) => onSlice),
+    frame,
+  ).filter(({ placed }) => placed.length >= ROSETTE_FROM);
   return [
     ...placedRuns(input.runs, frame).map(({ at }) => ({ at, radius: 11 })),
+    // their count stands to the left
+    ...rosettes.map(({ centre: [x, y] }) => ({ at: [x - 46, y] as const, radius: 20 })),
     ...ghosts.map(({ x, y }) => ({ at: frame.at(x, y), radius: 4, isSoft: true })),
   ];
 }
