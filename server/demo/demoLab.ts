@@ -59,7 +59,7 @@ const NO_LIMITS = {
 
 export const GRANITE_BRIEF: BriefParts = {
   title: 'Coarse sand from Quernby granite, little dust',
-  question: 'At least 80 % below 2 mm, at most 7 % dust below 0.125 mm, and no more than 18 kWh/t.',
+  question: 'At least 78 % below 2 mm, at most 8 % dust below 0.125 mm, and no more than 20 kWh/t.',
   factors: [
     { key: 'voltage', low: 130, high: 180, scale: 'linear' },
     { key: 'gap', low: 16, high: 34, scale: 'linear' },
@@ -75,8 +75,8 @@ export const GRANITE_BRIEF: BriefParts = {
       unit: '%',
       apertureMm: 2,
       aim: 'maximise',
-      low: 80,
-      high: 92,
+      low: 78,
+      high: 90,
     },
     {
       ...NO_LIMITS,
@@ -87,7 +87,7 @@ export const GRANITE_BRIEF: BriefParts = {
       apertureMm: 0.125,
       aim: 'minimise',
       low: 3,
-      high: 7,
+      high: 8,
     },
     {
       ...NO_LIMITS,
@@ -97,7 +97,7 @@ export const GRANITE_BRIEF: BriefParts = {
       unit: 'kWh/t',
       aim: 'minimise',
       low: 6,
-      high: 18,
+      high: 20,
     },
     {
       ...NO_LIMITS,

@@ -1,7 +1,7 @@
 import type { ConstraintInput } from '../schemas/calc/common';
 import type { FitRequest } from '../schemas/calc/fit';
 import { toCoded } from '../stats/coding/code';
-import { keeps, readConstraint } from '../stats/coding/constraint';
+import { keeps, readConstraint, slackOf } from '../stats/coding/constraint';
 import { isCategorical, type Settings } from '../stats/coding/factor';
 import { StatsError } from '../stats/errors';
 import { fitModel } from '../stats/fit/fitModel';
@@ -24,8 +24,8 @@ export interface SurfaceAnswer {
   /** Standard deviation of the mean over that of one run. */
   readonly spread: readonly (readonly number[])[];
   readonly feasible: readonly (readonly boolean[])[];
-  /** For each constraint, whether each point keeps it: where its edge runs. */
-  readonly keepsEach: readonly (readonly (readonly boolean[])[])[];
+  /** For each constraint how much room is left, in its own units; its edge runs where this is 0. */
+  readonly slack: readonly (readonly (readonly number[])[])[];
 }
 
 /** Evaluates one model on a grid. @throws StatsError `unknown-term` when an axis is no numeric factor. */
@@ -64,6 +64,6 @@ export function surfaceAnswer({ fit, constraints, x, y, at }: SurfaceRequest): S
     ),
     spread: over(() => Math.sqrt(Math.max(0, leverageOfRow(predictor, rowAt(predictor, coded))))),
     feasible: over(() => limits.every((limit) => keeps(limit, values))),
-    keepsEach: limits.map((limit) => over(() => keeps(limit, values))),
+    slack: limits.map((limit) => over(() => slackOf(limit, values))),
   };
 }

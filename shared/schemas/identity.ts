@@ -1,7 +1,11 @@
 import { z } from 'zod';
 
 /** Ids are positive whole numbers up to 2⁵³ − 1; in a path they come as digits and nothing else. */
-export const idSchema = z.number().int().positive().max(Number.MAX_SAFE_INTEGER);
+export const idSchema = z
+  .number('Choose one of the list.')
+  .int('An id is a whole number.')
+  .positive('Choose one of the list.')
+  .max(Number.MAX_SAFE_INTEGER);
 
 export const pathIdSchema = z
   .string()

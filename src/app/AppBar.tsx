@@ -56,7 +56,10 @@ function PersonMenu({ user }: { readonly user: UserJson }) {
   const other = currentTheme() === 'dark' ? 'light' : 'dark';
   return (
     <DropdownMenu.Root modal={false}>
-      <DropdownMenu.Trigger className="person-mark" aria-label={`Signed in as ${user.name}`}>
+      <DropdownMenu.Trigger
+        className="person-mark"
+        aria-label={`${initials(user.name)}: signed in as ${user.name}`}
+      >
         {initials(user.name)}
       </DropdownMenu.Trigger>
       <DropdownMenu.Portal>

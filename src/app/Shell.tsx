@@ -5,6 +5,7 @@ import { sessionQuery } from '@/queries/session';
 import { AppBar } from './AppBar';
 
 const CUSTOMER_HOME = '/my-samples';
+const AT_THE_BENCH = /^\/studies\/\d+\/bench\/\d+$/;
 
 /** Everything behind the sign-in: the bar, and the page below it. */
 export function Shell() {
@@ -28,7 +29,8 @@ export function Shell() {
       <a href="#content" className="skip">
         To the content
       </a>
-      <AppBar user={user} />
+      {/* at the bench the run sheet has the whole screen */}
+      {!AT_THE_BENCH.test(pathname) && <AppBar user={user} />}
       <div id="content">
         <Outlet />
       </div>

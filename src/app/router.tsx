@@ -1,4 +1,5 @@
 import { createBrowserRouter, type RouteObject } from 'react-router-dom';
+import { LoadingState } from '@/components/states';
 import { PageError } from './PageError';
 import { Shell } from './Shell';
 
@@ -11,18 +12,26 @@ const page = (path: string, load: () => Promise<Page>): RouteObject => ({
   errorElement: <PageError />,
 });
 
+/** While the first page’s chunk is on its way. */
+function Opening() {
+  return <LoadingState what="Opening Cragline." lines={3} />;
+}
+
 export const router = createBrowserRouter([
   {
     path: '/sign-in',
+    hydrateFallbackElement: <Opening />,
     lazy: async () => ({ Component: (await import('@/pages/SignInPage')).SignInPage }),
   },
   {
     path: '/invitation',
+    hydrateFallbackElement: <Opening />,
     lazy: async () => ({ Component: (await import('@/pages/InvitationPage')).InvitationPage }),
   },
   {
     path: '/',
     element: <Shell />,
+    hydrateFallbackElement: <Opening />,
     errorElement: <PageError />,
     children: [
       page('', async () => (await import('@/pages/StudiesPage')).StudiesPage),

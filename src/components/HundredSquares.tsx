@@ -5,8 +5,8 @@ interface HundredSquaresProps {
 }
 
 const COLUMNS = 25;
-const STEP = 11;
-const SIDE = 8;
+const STEP = 9;
+const SIDE = 7;
 
 /** One square for each imagined repeat of a hundred: filled where all goals hold, misses last. */
 export function HundredSquares({ probability, error }: HundredSquaresProps) {
@@ -17,7 +17,6 @@ export function HundredSquares({ probability, error }: HundredSquaresProps) {
       width={COLUMNS * STEP}
       height={4 * STEP}
       viewBox={`0 0 ${COLUMNS * STEP} ${4 * STEP}`}
-      className="max-w-full"
       role="img"
       aria-label={words}
     >

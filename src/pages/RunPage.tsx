@@ -4,6 +4,7 @@ import { useState } from 'react';
 import { Link, useNavigate } from 'react-router-dom';
 import { LinkButton } from '@/components/Button';
 import { Notice } from '@/components/Notice';
+import { Wordmark } from '@/components/Wordmark';
 import { PracticeTag } from '@/components/PracticeTag';
 import { EmptyState, ErrorState, ForbiddenState, LoadingState } from '@/components/states';
 import { RunSheet } from '@/features/bench/RunSheet';
@@ -29,6 +30,9 @@ function RunOf({ study }: { readonly study: StudyJson }) {
     // dark by default at the bench, whatever the desk prefers
     <div data-theme="dark" className="min-h-screen bg-paper text-ink">
       <header className="bench-bar">
+        <Link to="/" aria-label="Cragline, to the start">
+          <Wordmark height={30} isMarkOnly />
+        </Link>
         <Link to={back} className="link">
           All runs
         </Link>

@@ -62,6 +62,16 @@ export function keeps({ parts, op, bound }: ReadConstraint, values: ArrayLike<nu
   return op === '<=' ? sum <= bound + slack : sum >= bound - slack;
 }
 
+/** How far values are from breaking a constraint, in its own units: 0 on its edge, negative beyond. */
+export function slackOf({ parts, op, bound }: ReadConstraint, values: ArrayLike<number>): number {
+  const sum = parts.reduce(
+    (total, { coefficient, places }) =>
+      total + places.reduce((part, place) => part * values[place]!, coefficient),
+    0,
+  );
+  return op === '<=' ? bound - sum : sum - bound;
+}
+
 /** A constraint in words: "voltage − 9·gap ≤ 0". */
 export function constraintWords({ terms, op, bound }: Constraint): string {
   const figure = (value: number) => String(Number(value.toPrecision(4)));

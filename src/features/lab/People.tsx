@@ -17,6 +17,7 @@ import { Panel } from '@/components/Panel';
 import { newKey } from '@/lib/api';
 import { formatMoment } from '@/lib/format';
 import { showIssues } from '@/lib/formErrors';
+import { optionalId } from '@/lib/optionalId';
 import { useChangePerson, useInviteAgain, useInvitePerson } from '@/queries/lab';
 
 interface Invitation {
@@ -84,7 +85,7 @@ function InviteForm({ customers, onInvited }: InviteFormProps) {
             ]}
             error={errors.customerId?.message}
             {...register('customerId', {
-              setValueAs: (value: string) => (value === '' ? null : Number(value)),
+              setValueAs: optionalId,
             })}
           />
         )}
@@ -133,7 +134,7 @@ export function People({ people, customers }: PeopleProps) {
     },
     {
       key: 'act',
-      header: '',
+      header: <span className="sr-only">Actions</span>,
       cell: (person) => (
         <span className="flex gap-4 justify-end">
           <button

@@ -1,6 +1,7 @@
 import type { RunJson } from '@shared/schemas/run';
 import { setPointOf, type SettingJson, type SetPointKey } from '@shared/schemas/setPoint';
 import { snap } from '@shared/stats/coding/snap';
+import { constraintsOf } from '@shared/study/plan';
 import type { Evidence } from '@shared/study/requests';
 import { useDeferredValue, useState } from 'react';
 import type { MapMove } from '@/charts/map/mapKeys';
@@ -9,8 +10,8 @@ import { Notice } from '@/components/Notice';
 import { Segments } from '@/components/Segments';
 import { LoadingState } from '@/components/states';
 import { formatNumber, formatPlain, withUnit } from '@/lib/format';
-import { computedGoals, modelledGoals } from './mapGoals';
-import { latticeOf, rangeOf, sectionEnds } from './mapGrid';
+import { exactGoals, modelledGoals } from './goalLines';
+import { heldWords, latticeOf, limitName, rangeOf, sectionEnds } from './mapGrid';
 import {
   axisWords,
   dialOf,
@@ -23,7 +24,6 @@ import {
 } from './mapModel';
 import { MapPanel } from './MapPanel';
 import { runsOnMap } from './mapRuns';
-import { rigLimitsOn } from './rigLimits';
 import { SectionPanel, type SectionWay } from './SectionPanel';
 import { SetPointPanel } from './SetPointPanel';
 import { useChance, useSurfaces } from './useMapCalculations';
@@ -98,6 +98,7 @@ export function MapBoard({ evidence, models }: MapBoardProps) {
   const failure = surfaces.find(({ error }) => error)?.error;
   const others = brief.factors.map(({ key }) => key).filter((key) => !axes.includes(key));
   const ends = sectionEnds(way, [xLow, xHigh], [yLow, yHigh], [setting[xKey], setting[yKey]]);
+  const limitNames = constraintsOf(brief, evidence.envelope).map(limitName(evidence.envelope));
   const axis = (key: SetPointKey) => ({ label: axisWords(key).name, unit: axisWords(key).unit });
   const map: MapInput | null = surface
     ? {
@@ -105,18 +106,21 @@ export function MapBoard({ evidence, models }: MapBoardProps) {
         y: { ...axis(yKey), values: grid.y },
         z: surface.predicted,
         unit: response.unit,
-        limits: rigLimitsOn(evidence, axes, grid, slice),
+        limits: surface.slack.map((margin, i) => ({
+          label: limitNames[i] ?? '',
+          // on a phone the figure alone
+          shortLabel: (limitNames[i] ?? '').replace(/^\D+/, ''),
+          margin,
+        })),
         support: surface.spread,
         runs: runsOnMap(evidence, model, axes, setting),
         goals: [
           ...modelledGoals(
-            models.map((each, i) => ({
-              response: each.response,
-              values: surfaces[i]?.data?.predicted,
-            })),
+            models,
+            surfaces.map(({ data }) => data?.predicted ?? null),
             response.key,
           ),
-          ...computedGoals(evidence, axes, grid, slice),
+          ...exactGoals(evidence, axes, grid, slice),
         ],
         setPoint: { x: setting[xKey], y: setting[yKey] },
         section: {
@@ -139,7 +143,7 @@ export function MapBoard({ evidence, models }: MapBoardProps) {
           map={map}
           isFeasible={surface?.feasible ?? []}
           reading={`${settingWords([yKey, xKey], setting)}: ${withUnit(formatNumber(predicted, 1), response.unit)}`}
-          fact={`over ${axisWords(xKey).name.toLowerCase()} and ${axisWords(yKey).name.toLowerCase()}${others.length > 0 ? ` at ${others.map((key) => `${setPointOf(key).name} ${settingWords([key], setting)}`).join(', ')}` : ''}`}
+          fact={`over ${axisWords(xKey).name.toLowerCase()} and ${axisWords(yKey).name.toLowerCase()}${others.length > 0 ? ` at ${others.map(heldWords(setting)).join(', ')}` : ''}`}
           control={
             models.length > 1 && (
               <Segments

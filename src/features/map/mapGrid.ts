@@ -1,6 +1,9 @@
-import type { SetPointKey } from '@shared/schemas/setPoint';
+import type { ConstraintInput } from '@shared/schemas/calc/common';
+import type { EnvelopeJson } from '@shared/schemas/rig';
+import { setPointOf, type SettingJson, type SetPointKey } from '@shared/schemas/setPoint';
 import type { Evidence } from '@shared/study/requests';
 import type { Axes } from '@/charts/grid';
+import { formatPlain, withUnit } from '@/lib/format';
 import type { SectionEnds, SectionWay } from './SectionPanel';
 
 export type Range = readonly [number, number];
@@ -46,3 +49,22 @@ export function sectionEnds(
     [inset(x, 0.92), inset(y, 0.96)],
   ];
 }
+
+/** "40 pulses", "2 Hz": what a slice is held at. */
+export const heldWords = (setting: SettingJson) => (key: SetPointKey) => {
+  const { name, unit } = setPointOf(key);
+  const figure = withUnit(formatPlain(setting[key]), unit);
+  return unit === '' ? `${figure} ${name.toLowerCase()}` : figure;
+};
+
+/** A limit of the rig as it stands along its edge on the map. */
+export const limitName = (envelope: EnvelopeJson) => (constraint: ConstraintInput) => {
+  if (
+    constraint.terms['voltage^2:frequency'] !== undefined ||
+    constraint.terms['voltage^2'] !== undefined
+  )
+    return `charger ${withUnit(formatPlain(envelope.chargingPowerW), 'W')}`;
+  return constraint.op === '<='
+    ? `field limit ${withUnit(formatPlain(envelope.fieldMaxKvPerMm), 'kV/mm')}`
+    : `misfires below ${withUnit(formatPlain(envelope.fieldMinKvPerMm), 'kV/mm')}`;
+};

@@ -34,7 +34,7 @@ export function SignedRelease({ release }: { readonly release: ReleaseJson }) {
     { name: 'Released', value: `${signedBy.name}, ${formatMoment(signedAt)}` },
     {
       name: 'Valid until',
-      value: content.validUntil ? formatDay(content.validUntil) : 'withdrawn',
+      value: content.validUntil ? formatDay(content.validUntil) : 'until withdrawn',
     },
     { name: 'Revision', value: String(revision) },
     { name: 'Data seal', value: sealShort.replace(/(.{4})/g, '$1 ').trim() },

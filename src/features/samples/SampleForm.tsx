@@ -11,6 +11,7 @@ import { NumberField } from '@/components/NumberField';
 import { Panel } from '@/components/Panel';
 import { newKey } from '@/lib/api';
 import { showIssues } from '@/lib/formErrors';
+import { optionalId } from '@/lib/optionalId';
 import { useRegisterSample } from '@/queries/samples';
 
 interface SampleFormProps {
@@ -72,7 +73,7 @@ export function SampleForm({ customers, onRegistered }: SampleFormProps) {
               ]}
               error={errors.customerId?.message}
               {...register('customerId', {
-                setValueAs: (value: string) => (value === '' ? null : Number(value)),
+                setValueAs: optionalId,
               })}
             />
             <div className="grid phone:grid-cols-2 gap-4">
