@@ -57,7 +57,8 @@ export function layer({ x, y, z = 2, draw }: Layer): CustomSeriesOption {
       const rect = params.coordSys as unknown as Record<'x' | 'y' | 'width' | 'height', number>;
       const { width, height } = rect;
       const frame = frameOf({ left: rect.x, top: rect.y, width, height }, x, y);
-      return { type: 'group', children: draw(frame) };
+      // a new drawing replaces the old one whole: its shapes do not correspond one by one
+      return { type: 'group', $mergeChildren: false, children: draw(frame) };
     },
   };
 }

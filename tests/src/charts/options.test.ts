@@ -31,13 +31,20 @@ const tokens = Object.fromEntries(
 ) as ChartTokens;
 const size = { width: 800, height: 420 };
 
-function svgOf(option: EChartsCoreOption): string {
+/** The picture of the last of some options that one chart shows after each other. */
+function svgOf(...options: readonly EChartsCoreOption[]): string {
   const chart = echarts.init(null, null, { renderer: 'svg', ssr: true, ...size });
-  chart.setOption(option);
+  for (const option of options) {
+    chart.setOption(option, { notMerge: true });
+    chart.renderToSVGString();
+  }
   const svg = chart.renderToSVGString();
   chart.dispose();
   return svg;
 }
+
+// ids and classes are numbered through all charts of a process
+const plain = (svg: string) => svg.replace(/zr\d+[-\w]*|cls-\d+/g, '');
 
 const OPTIONS: Readonly<Record<string, () => EChartsCoreOption>> = {
   map: () => contourMapOption(SAMPLE_MAP, tokens, size),
@@ -58,8 +65,6 @@ describe('options', () => {
   });
 
   it.each(Object.keys(OPTIONS))('give the same picture for the same numbers: %s', (name) => {
-    // ids and classes are numbered through all charts of a process
-    const plain = (svg: string) => svg.replace(/zr\d+[-\w]*|cls-\d+/g, '');
     expect(plain(svgOf(OPTIONS[name]!()))).toBe(plain(svgOf(OPTIONS[name]!())));
   });
 });
@@ -70,6 +75,16 @@ describe('the map', () => {
     expect(svg.match(new RegExp(`fill="${tokens.spark}"`, 'g'))).toHaveLength(1);
     for (const words of ['80 %', '18 kWh/t', 'field limit 9 kV/mm', '6 runs', 'A′', 'Gap, mm'])
       expect(svg).toContain(words);
+  });
+
+  it('draws the next slice as if it were the first', () => {
+    const other = contourMapOption(
+      { ...SAMPLE_MAP, runs: [], goals: [], section: null },
+      tokens,
+      size,
+    );
+    const map = OPTIONS['map']!();
+    expect(plain(svgOf(other, map))).toBe(plain(svgOf(map)));
   });
 
   it('draws without limits, support, goals, runs, section and set-point', () => {
