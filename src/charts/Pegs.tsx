@@ -37,6 +37,10 @@ export function Pegs({ pegs, floor, label }: PegsProps) {
       {stacksOf(pegs).map((stack) => (
         <Stick key={`${stack.x} ${stack.y}`} stack={stack} />
       ))}
+      {/* last, so that no nearer peg hides a count */}
+      {pegs.map((peg) => (
+        <Count key={`${peg.x} ${peg.y} ${peg.z}`} peg={peg} />
+      ))}
     </svg>
   );
 }
@@ -73,20 +77,27 @@ function Stick({ stack: { x, y, heads } }: { readonly stack: Stack }) {
   );
 }
 
-function Head({ head: { x, y, z, count, isBroken } }: { readonly head: Peg }) {
+function Head({ head: { x, y, z, isBroken } }: { readonly head: Peg }) {
   const [cx, cy] = onSlab(x, y, z);
-  return (
-    <>
-      {isBroken ? (
-        <path d={`M${cx - 4} ${cy - 4}l8 8m0 -8l-8 8`} strokeWidth={2} className="stroke-stop" />
-      ) : (
-        <circle cx={cx} cy={cy} r={4.6} strokeWidth={1.6} className="fill-surface stroke-ink" />
-      )}
-      {count > 1 && (
-        <text x={cx + 8} y={cy + 4} className="mono">
-          ×{count}
-        </text>
-      )}
-    </>
+  return isBroken ? (
+    <path d={`M${cx - 4} ${cy - 4}l8 8m0 -8l-8 8`} strokeWidth={2} className="stroke-stop" />
+  ) : (
+    <circle cx={cx} cy={cy} r={4.6} strokeWidth={1.6} className="fill-surface stroke-ink" />
+  );
+}
+
+function Count({ peg: { x, y, z, count } }: { readonly peg: Peg }) {
+  const [cx, cy] = onSlab(x, y, z);
+  return count < 2 ? null : (
+    <text
+      x={cx - 8}
+      y={cy + 4}
+      textAnchor="end"
+      paintOrder="stroke"
+      strokeWidth={3}
+      className="mono stroke-surface"
+    >
+      ×{count}
+    </text>
   );
 }
