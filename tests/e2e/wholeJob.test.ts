@@ -79,9 +79,7 @@ async function openRuns(page: Page) {
   await table.waitFor();
   const rows = await table
     .getByRole('row')
-    .evaluateAll((all) =>
-      all.map((row) => [...row.children].map((cell) => cell.textContent ?? '')),
-    );
+    .evaluateAll((all) => all.map((row) => [...row.children].map((cell) => cell.textContent)));
   return rows
     .filter((cells) => cells.includes('open'))
     .map((cells) => ({
