@@ -31,6 +31,8 @@ export default {
         'stop-wash',
         'focus',
         'spark',
+        'veil',
+        ...Array.from({ length: 9 }, (_, band) => `map-${band}`),
       ]),
     },
     spacing: {
@@ -57,6 +59,7 @@ export default {
     fontWeight: { body: '400', mark: '500', head: '600' },
     fontFamily: { sans: [token('font-sans')], mono: [token('font-mono')] },
     borderRadius: { none: '0', DEFAULT: token('radius'), full: token('radius-round') },
+    backgroundImage: { none: 'none', 'hatch-infeasible': token('hatch-infeasible') },
     maxWidth: {
       measure: token('measure'),
       form: '46rem',

@@ -1,19 +1,7 @@
-import type { EChartsOption } from 'echarts';
-import {
-  Component,
-  lazy,
-  Suspense,
-  useMemo,
-  useState,
-  useSyncExternalStore,
-  type ReactNode,
-} from 'react';
+import { Component, useState, type ReactNode } from 'react';
 import { DataTable, type Column } from '@/components/DataTable';
 import { Notice } from '@/components/Notice';
-import { currentTheme, onThemeChange, type Theme } from '@/lib/theme';
-import { readTokens, type ChartTokens } from './tokens';
-
-const EChart = lazy(() => import('./EChart').then(({ EChart: Drawing }) => ({ default: Drawing })));
+import { Drawing, type OptionOf } from './Drawing';
 
 /** A plot that fails leaves the numbers on screen. */
 class PlotBoundary extends Component<{ readonly children: ReactNode }, { hasFailed: boolean }> {
@@ -45,6 +33,8 @@ interface ChartFrameProps<Row> {
   readonly children: ReactNode;
   /** A drawing that takes focus names itself. */
   readonly isInteractive?: boolean;
+  /** Held by the caller when a key of the drawing switches it too. */
+  readonly view?: { readonly isTable: boolean; readonly onSwitched: (isTable: boolean) => void };
 }
 
 /** Every chart has its table: a switch below it shows the same numbers. */
@@ -53,8 +43,10 @@ export function ChartFrame<Row>({
   table,
   children,
   isInteractive = false,
+  view,
 }: ChartFrameProps<Row>) {
-  const [isTable, setIsTable] = useState(false);
+  const [own, setOwn] = useState(false);
+  const { isTable, onSwitched } = view ?? { isTable: own, onSwitched: setOwn };
   return (
     <figure className="grid gap-2 m-0 min-w-0">
       {isTable ? (
@@ -65,7 +57,7 @@ export function ChartFrame<Row>({
         </div>
       )}
       <figcaption className="text-right">
-        <button type="button" className="link text-2" onClick={() => setIsTable(!isTable)}>
+        <button type="button" className="link text-2" onClick={() => onSwitched(!isTable)}>
           {isTable ? 'As a chart' : 'As a table'}
         </button>
       </figcaption>
@@ -73,23 +65,18 @@ export function ChartFrame<Row>({
   );
 }
 
-/** Read once for each theme: the page has switched by the time a chart asks. */
-const tokensOf = (_theme: Theme): ChartTokens => readTokens();
-
-interface ChartProps<Row> extends Omit<ChartFrameProps<Row>, 'children' | 'isInteractive'> {
-  /** Pure: numbers and tokens to an ECharts option. */
-  readonly option: (tokens: ChartTokens) => EChartsOption;
+interface ChartProps<Row> extends Omit<
+  ChartFrameProps<Row>,
+  'children' | 'isInteractive' | 'view'
+> {
+  readonly option: OptionOf;
   readonly height: number;
 }
 
 export function Chart<Row>({ option, height, ...frame }: ChartProps<Row>) {
-  const theme = useSyncExternalStore(onThemeChange, currentTheme);
-  const tokens = useMemo(() => tokensOf(theme), [theme]);
   return (
     <ChartFrame {...frame}>
-      <Suspense fallback={<div style={{ height }} />}>
-        <EChart option={option(tokens)} height={height} />
-      </Suspense>
+      <Drawing option={option} height={height} />
     </ChartFrame>
   );
 }

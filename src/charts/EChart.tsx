@@ -1,29 +1,14 @@
 import ReactEChartsCore from 'echarts-for-react/esm/core';
-import type { EChartsOption } from 'echarts';
-import { BarChart, CustomChart, LineChart, ScatterChart } from 'echarts/charts';
-import {
-  GridComponent,
-  MarkAreaComponent,
-  MarkLineComponent,
-  TooltipComponent,
-} from 'echarts/components';
+import { CustomChart } from 'echarts/charts';
+import { GridComponent } from 'echarts/components';
 import * as echarts from 'echarts/core';
 import { SVGRenderer } from 'echarts/renderers';
 
-echarts.use([
-  BarChart,
-  CustomChart,
-  LineChart,
-  ScatterChart,
-  GridComponent,
-  MarkAreaComponent,
-  MarkLineComponent,
-  TooltipComponent,
-  SVGRenderer,
-]);
+// SVG prints sharp and takes the page's own fonts as they arrive
+echarts.use([CustomChart, GridComponent, SVGRenderer]);
 
 interface EChartProps {
-  readonly option: EChartsOption;
+  readonly option: echarts.EChartsCoreOption;
   readonly height: number;
 }
 

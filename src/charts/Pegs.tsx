@@ -1,13 +1,8 @@
 import { useId } from 'react';
+import { pathOf, type Point } from './geometry';
+import { onSlab, SLAB_HEIGHT, SLAB_WIDTH, stacksOf, type Peg, type Stack } from './slab';
 
-export interface Peg {
-  /** 0…1 across, deep and high. */
-  readonly x: number;
-  readonly y: number;
-  readonly z: number;
-  readonly count: number;
-  readonly isBroken: boolean;
-}
+export type { Peg } from './slab';
 
 interface PegsProps {
   readonly pegs: readonly Peg[];
@@ -16,82 +11,93 @@ interface PegsProps {
   readonly label: string;
 }
 
-const WIDTH = 300;
-const HEIGHT = 150;
-const BASE = 128;
-
-/** Floor coordinates in perspective: across to the right, deep upwards and to the right. */
-const at = (x: number, y: number): readonly [number, number] => [
-  12 + 216 * x + 56 * y,
-  BASE - 66 * y,
-];
-
-const path = (points: readonly (readonly [number, number])[]) =>
-  points.map(([x, y], i) => `${i === 0 ? 'M' : 'L'}${x.toFixed(1)} ${y.toFixed(1)}`).join('');
-
-/** Settings as pegs on the settable floor: the height is the third factor, ×6 are repeats. */
+/** Settings as pegs on the settable floor: the height is the third set-point, ×6 are repeats. */
 export function Pegs({ pegs, floor, label }: PegsProps) {
   const id = useId();
-  const whole = [at(0, 0), at(1, 0), at(1, 1), at(0, 1)];
-  const sorted = [...pegs].sort((a, b) => b.y - a.y);
+  const slab = [onSlab(0, 0), onSlab(1, 0), onSlab(1, 1), onSlab(0, 1)] as const;
   return (
-    <svg viewBox={`0 0 ${WIDTH} ${HEIGHT}`} width="100%" role="img" aria-label={label}>
-      <defs>
-        <pattern
-          id={id}
-          width="6"
-          height="6"
-          patternUnits="userSpaceOnUse"
-          patternTransform="rotate(45)"
-        >
-          <path d="M0 0V6" stroke="var(--line-strong)" strokeOpacity="0.7" />
-        </pattern>
-      </defs>
-      <path
-        d={`${path(whole)}Z`}
-        fill={`url(#${id})`}
-        stroke="var(--line-strong)"
-        strokeWidth="0.8"
-      />
+    <svg viewBox={`0 0 ${SLAB_WIDTH} ${SLAB_HEIGHT}`} width="100%" role="img" aria-label={label}>
+      <pattern
+        id={id}
+        width={6}
+        height={6}
+        patternUnits="userSpaceOnUse"
+        patternTransform="rotate(45)"
+      >
+        <path d="M0 0V6" strokeOpacity={0.7} className="stroke-line-strong" />
+      </pattern>
+      <path d={`${pathOf(slab)}Z`} fill={`url(#${id})`} className="stroke-line" />
       {floor.length > 2 && (
         <path
-          d={`${path(floor.map(([x, y]) => at(x, y)))}Z`}
-          fill="var(--map-1)"
-          stroke="var(--ink-3)"
-          strokeWidth="0.8"
+          d={`${pathOf(floor.map(([x, y]) => onSlab(x, y)))}Z`}
+          className="fill-map-1 stroke-line-strong"
         />
       )}
-      {sorted.map((peg, i) => {
-        const [x, y] = at(peg.x, peg.y);
-        const top = y - 8 - 44 * peg.z;
-        return (
-          <g key={i}>
-            <ellipse cx={x} cy={y} rx="3.4" ry="1.4" fill="var(--ink-2)" />
-            <path d={`M${x} ${y}V${top}`} stroke="var(--ink-2)" strokeWidth="1.1" />
-            {peg.isBroken ? (
-              <path
-                d={`M${x - 4} ${top - 4}l8 8M${x + 4} ${top - 4}l-8 8`}
-                stroke="var(--stop)"
-                strokeWidth="2"
-              />
-            ) : (
-              <circle
-                cx={x}
-                cy={top}
-                r="4.4"
-                fill="var(--surface)"
-                stroke="var(--ink)"
-                strokeWidth="1.4"
-              />
-            )}
-            {peg.count > 1 && (
-              <text x={x + 7} y={top + 4}>
-                ×{peg.count}
-              </text>
-            )}
-          </g>
-        );
-      })}
+      <Thickness corners={[slab[0], slab[1], slab[2]]} />
+      {stacksOf(pegs).map((stack) => (
+        <Stick key={`${stack.x} ${stack.y}`} stack={stack} />
+      ))}
+      {/* last, so that no nearer peg hides a count */}
+      {pegs.map((peg) => (
+        <Count key={`${peg.x} ${peg.y} ${peg.z}`} peg={peg} />
+      ))}
     </svg>
+  );
+}
+
+/** The slab's two near sides. */
+function Thickness({ corners: [a, b, c] }: { readonly corners: readonly [Point, Point, Point] }) {
+  return (
+    <>
+      <path
+        d={`M${a[0]} ${a[1]}v4L${b[0]} ${b[1] + 4}v-4Z`}
+        fillOpacity={0.5}
+        className="fill-map-3"
+      />
+      <path
+        d={`M${b[0]} ${b[1] + 4}v-4L${c[0]} ${c[1]}v4Z`}
+        fillOpacity={0.6}
+        className="fill-map-4"
+      />
+    </>
+  );
+}
+
+function Stick({ stack: { x, y, heads } }: { readonly stack: Stack }) {
+  const [footX, footY] = onSlab(x, y);
+  const top = Math.min(...heads.map(({ z }) => onSlab(x, y, z)[1]));
+  return (
+    <g>
+      <ellipse cx={footX} cy={footY} rx={3.4} ry={1.7} className="fill-ink-3" />
+      <path d={`M${footX} ${footY}V${top}`} strokeWidth={1.3} className="stroke-ink-2" />
+      {heads.map((head) => (
+        <Head key={head.z} head={head} />
+      ))}
+    </g>
+  );
+}
+
+function Head({ head: { x, y, z, isBroken } }: { readonly head: Peg }) {
+  const [cx, cy] = onSlab(x, y, z);
+  return isBroken ? (
+    <path d={`M${cx - 4} ${cy - 4}l8 8m0 -8l-8 8`} strokeWidth={2} className="stroke-stop" />
+  ) : (
+    <circle cx={cx} cy={cy} r={4.6} strokeWidth={1.6} className="fill-surface stroke-ink" />
+  );
+}
+
+function Count({ peg: { x, y, z, count } }: { readonly peg: Peg }) {
+  const [cx, cy] = onSlab(x, y, z);
+  return count < 2 ? null : (
+    <text
+      x={cx - 8}
+      y={cy + 4}
+      textAnchor="end"
+      paintOrder="stroke"
+      strokeWidth={3}
+      className="mono stroke-surface"
+    >
+      ×{count}
+    </text>
   );
 }

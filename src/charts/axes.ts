@@ -1,69 +1,125 @@
-import type { EChartsOption } from 'echarts';
-import type { ChartTokens } from './tokens';
+import type { CustomSeriesOption } from 'echarts/charts';
+import type { EChartsCoreOption } from 'echarts/core';
+import { formatPlain } from '@/lib/format';
+import { layer, type Domain } from './frame';
+import { path } from './shapes';
+import { SANS, type ChartTokens } from './tokens';
 
-/** What all charts have in common: no animation, quiet axes, horizontal grid lines only. */
-export function frame(tokens: ChartTokens): EChartsOption {
-  return {
-    animation: false,
-    textStyle: { fontFamily: tokens.fontFamily, fontSize: 12, color: tokens.ink2 },
-    grid: { left: 46, right: 16, top: 14, bottom: 42 },
-  };
+/** Width and height of the whole chart in pixels. */
+export interface ChartSize {
+  readonly width: number;
+  readonly height: number;
 }
 
-interface AxisOptions {
+/** Below this width every second label goes and marks stay silent. */
+export const NARROW_BELOW = 520;
+
+export const isNarrow = ({ width }: ChartSize): boolean => width < NARROW_BELOW;
+
+export interface Padding {
+  readonly left: number;
+  readonly right: number;
+  readonly top: number;
+  readonly bottom: number;
+}
+
+export interface AxisInput {
+  /** “Gap, mm” */
   readonly name: string;
-  readonly min?: number;
-  readonly max?: number;
-  readonly isLog?: boolean;
-  readonly hasGrid?: boolean;
+  readonly domain: Domain;
+  readonly ticks: readonly number[];
   readonly format?: (value: number) => string;
 }
 
-/** A value axis: ticks outward, name at the far end, unit after a comma. */
-export function valueAxis(tokens: ChartTokens, side: 'x' | 'y', options: AxisOptions) {
-  const { name, min, max, isLog = false, hasGrid = side === 'y', format } = options;
+interface PlotInput {
+  readonly tokens: ChartTokens;
+  readonly padding: Padding;
+  readonly x: AxisInput;
+  readonly y: AxisInput;
+  /** Level lines at the ticks of y; without them y has tick marks, as on the map. */
+  readonly hasGridlines?: boolean;
+  /** What is drawn, from the ground up; see `layer`. */
+  readonly layers: readonly CustomSeriesOption[];
+}
+
+const common = (tokens: ChartTokens, { domain, ticks, format = formatPlain }: AxisInput) => ({
+  type: 'value' as const,
+  min: domain.low,
+  max: domain.high,
+  axisLine: { show: false, onZero: false, lineStyle: { color: tokens['line-strong'], width: 1 } },
+  axisLabel: {
+    customValues: [...ticks],
+    color: tokens['ink-3'],
+    fontFamily: SANS,
+    fontSize: 12,
+    lineHeight: 16,
+    hideOverlap: true,
+    formatter: (value: number) => format(value),
+  },
+  splitLine: { show: false },
+});
+
+/**
+ * Grid and axes in the look: ticks outward, names at the far ends, horizontal gridlines only. The name
+ * of the vertical axis stands level above it: nobody turns the head to read it.
+ */
+export function plotOption(input: PlotInput): EChartsCoreOption {
+  const { tokens, padding, x, y, hasGridlines = true, layers } = input;
+  const tick = (ticks: readonly number[]) => ({
+    show: true,
+    length: 5,
+    customValues: [...ticks],
+    lineStyle: { color: tokens['line-strong'], width: 1 },
+  });
   return {
-    type: isLog ? ('log' as const) : ('value' as const),
-    name,
-    nameLocation: 'end' as const,
-    nameGap: side === 'x' ? 0 : 8,
-    nameTextStyle:
-      side === 'x'
-        ? {
-            align: 'right' as const,
-            verticalAlign: 'top' as const,
-            padding: [26, 0, 0, 0],
-            color: tokens.ink2,
-          }
-        : { align: 'left' as const, padding: [0, 0, 0, -34], color: tokens.ink2 },
-    ...(min === undefined ? {} : { min }),
-    ...(max === undefined ? {} : { max }),
-    axisLine: { show: side === 'x', onZero: false, lineStyle: { color: tokens.lineStrong } },
-    axisTick: { show: side === 'x', length: 5, lineStyle: { color: tokens.lineStrong } },
-    axisLabel: {
-      color: tokens.ink3,
-      fontSize: 12,
-      hideOverlap: true,
-      ...(format ? { formatter: format } : {}),
+    animation: false,
+    textStyle: { fontFamily: SANS },
+    grid: { ...padding, containLabel: false, outerBoundsMode: 'none' },
+    xAxis: {
+      ...common(tokens, x),
+      axisLine: { show: true, onZero: false, lineStyle: { color: tokens['line-strong'] } },
+      axisTick: tick(x.ticks),
+      name: x.name,
+      nameLocation: 'end',
+      nameGap: 0,
+      nameTextStyle: {
+        align: 'right',
+        verticalAlign: 'top',
+        padding: [28, 0, 0, 0],
+        color: tokens['ink-2'],
+        fontSize: 12,
+      },
     },
-    splitLine: { show: hasGrid, lineStyle: { color: tokens.line } },
-    splitNumber: 5,
+    yAxis: {
+      ...common(tokens, y),
+      axisTick: hasGridlines ? { show: false } : tick(y.ticks),
+      name: y.name,
+      nameLocation: 'end',
+      nameGap: 12,
+      nameTextStyle: {
+        align: 'left',
+        padding: [0, 0, 0, -padding.left],
+        color: tokens['ink-2'],
+        fontSize: 12,
+      },
+    },
+    series: [...(hasGridlines ? [gridlines(input)] : []), ...layers],
   };
 }
 
-/** A limit: a solid line with its words; the side that holds is named. */
-export function limitLine(tokens: ChartTokens, at: { x?: number; y?: number }, words: string) {
-  return {
-    ...(at.x === undefined ? { yAxis: at.y } : { xAxis: at.x }),
-    lineStyle: { color: tokens.ink, width: 1.3, type: 'solid' as const },
-    label: {
-      formatter: words,
-      position: 'insideEndTop' as const,
-      color: tokens.ink,
-      fontFamily: tokens.fontFamily,
-      fontSize: 12,
-    },
-  };
+/** Level hairlines; the axis' own could not be told at which values to stand. */
+function gridlines({ tokens, x, y }: PlotInput): CustomSeriesOption {
+  return layer({
+    x: x.domain,
+    y: y.domain,
+    z: 0,
+    draw: (frame) =>
+      y.ticks.map((tick) => {
+        const height = Math.round(frame.at(0, tick)[1]) + 0.5;
+        return path(`M${frame.left} ${height}h${frame.width}`, {
+          stroke: tokens.line,
+          lineWidth: 1,
+        });
+      }),
+  });
 }
-
-export const noSymbol = { symbol: ['none', 'none'] as [string, string], silent: true };

@@ -31,7 +31,7 @@ export function DataTable<Row>({
   empty = 'Nothing here yet.',
 }: DataTableProps<Row>) {
   return (
-    <div className="scroll-x" tabIndex={0} role="region" aria-label={caption}>
+    <div className="scroll-x" tabIndex={0} role="region" aria-label={`${caption}, table`}>
       <table className="table">
         <caption className="sr-only">{caption}</caption>
         <thead>

@@ -22,7 +22,7 @@ function Home({ study }: { readonly study: StudyJson }) {
   const { data: events = [] } = useQuery(studyQueries.history(study.id));
   const { usedG, lostG, returnedG, reservedG, leftG, receivedG } = study.stock;
   return (
-    <>
+    <main>
       <div className="head">
         <div className="col-span-full flex flex-wrap gap-6 items-start">
           <div className="flex-1 min-w-0">
@@ -41,7 +41,7 @@ function Home({ study }: { readonly study: StudyJson }) {
           <StageLine stations={stationsOf(study)} isBig />
         </div>
       </div>
-      <main className="page desk:grid-cols-[minmax(0,1.85fr)_minmax(0,1fr)]">
+      <div className="page desk:grid-cols-[minmax(0,1.85fr)_minmax(0,1fr)]">
         <WhatNext study={study} runs={runs} candidates={candidates} />
         <div className="grid gap-4">
           <Panel name="Sample budget" fact={`${formatMass(receivedG)} received`}>
@@ -54,8 +54,8 @@ function Home({ study }: { readonly study: StudyJson }) {
           </Panel>
           <Lately studyId={study.id} events={events} />
         </div>
-      </main>
-    </>
+      </div>
+    </main>
   );
 }
 

@@ -75,12 +75,11 @@ const HEADINGS =
 
 /** Run number and set-points of the open runs, from the table on the bench page. */
 async function openRuns(page: Page) {
-  const rows = await page
-    .getByRole('region', { name: 'Runs in run order' })
+  const table = page.getByRole('region', { name: 'Runs in run order' });
+  await table.waitFor();
+  const rows = await table
     .getByRole('row')
-    .evaluateAll((all) =>
-      all.map((row) => [...row.children].map((cell) => cell.textContent ?? '')),
-    );
+    .evaluateAll((all) => all.map((row) => [...row.children].map((cell) => cell.textContent)));
   return rows
     .filter((cells) => cells.includes('open'))
     .map((cells) => ({

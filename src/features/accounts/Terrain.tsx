@@ -1,39 +1,32 @@
-import { isolines, pathOf, type Grid } from '@/charts/contourGeometry';
+import { pathOf } from '@/charts/geometry';
+import { isolines, type Axes } from '@/charts/grid';
 
 const SIZE = 121;
-const WIDTH = 900;
-const HEIGHT = 900;
+const SIDE = 900;
+
+const evenly = Array.from({ length: SIZE }, (_, i) => (SIDE * i) / (SIZE - 1));
+const axes: Axes = { x: evenly, y: evenly };
 
 /** A quiet landscape of contour lines for the sign-in page: a made-up surface, no data. */
-const values = Array.from({ length: SIZE * SIZE }, (_, i) => {
-  const u = (i % SIZE) / (SIZE - 1);
-  const v = Math.floor(i / SIZE) / (SIZE - 1);
-  return (
-    90 -
-    70 * ((u - 0.56) ** 2 + 0.6 * (u - 0.56) * (v - 0.62) + (v - 0.62) ** 2) * 1.4 -
-    26 * Math.exp(-((u - 0.2) ** 2 + (v - 0.2) ** 2) * 9) +
-    9 * Math.sin(6 * u + 2 * v)
-  );
-});
-const grid: Grid = {
-  columns: SIZE,
-  rows: SIZE,
-  values,
-  box: { x0: 0, x1: WIDTH, y0: HEIGHT, y1: 0 },
-};
+const height = (u: number, v: number) =>
+  90 -
+  70 * ((u - 0.56) ** 2 + 0.6 * (u - 0.56) * (v - 0.62) + (v - 0.62) ** 2) * 1.4 -
+  26 * Math.exp(-((u - 0.2) ** 2 + (v - 0.2) ** 2) * 9) +
+  9 * Math.sin(6 * u + 2 * v);
+const heights = evenly.map((y) => evenly.map((x) => height(x / SIDE, 1 - y / SIDE)));
 const levels = Array.from({ length: 40 }, (_, i) => 2.5 * i);
 
 export function Terrain() {
   return (
     <svg
-      viewBox={`0 0 ${WIDTH} ${HEIGHT}`}
+      viewBox={`0 0 ${SIDE} ${SIDE}`}
       width="100%"
       height="100%"
       preserveAspectRatio="xMidYMid slice"
       aria-hidden="true"
     >
       {levels.map((level) =>
-        isolines(grid, level).map((line, i) => (
+        isolines(heights, axes, level).map((line, i) => (
           <path
             key={`${level} ${i}`}
             d={pathOf(line)}

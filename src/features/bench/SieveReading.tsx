@@ -1,7 +1,7 @@
 import type { SieveAnswer } from '@shared/schemas/calc/sieve';
 import type { BriefJson } from '@shared/schemas/study';
 import { Chart } from '@/charts/Chart';
-import { sieveCurveOption } from '@/charts/sieveCurve';
+import { sieveCurveOption } from '@/charts/sieveCurveOption';
 import { formatAperture, formatNumber, formatSignificant, withUnit } from '@/lib/format';
 
 interface SieveReadingProps {
@@ -26,16 +26,21 @@ export function SieveReading({ sieve, brief }: SieveReadingProps) {
       <Chart
         label="Percent passing over the sieve opening"
         height={320}
-        option={(tokens) =>
+        option={(tokens, size) =>
           sieveCurveOption(
             {
               points: rows.map(({ apertureMm, cumulativePassingPercent }) => ({
-                apertureMm,
+                openingMm: apertureMm,
                 passingPercent: cumulativePassingPercent,
               })),
-              marks,
+              others: [],
+              marked: marks.map(({ apertureMm, passingPercent }) => ({
+                openingMm: apertureMm,
+                passingPercent,
+              })),
             },
             tokens,
+            size,
           )
         }
         table={{

@@ -5,6 +5,7 @@ import { termsOf } from '@shared/stats/model/term';
 import { useRef, type KeyboardEvent } from 'react';
 import { termSymbol } from '@/lib/termSymbol';
 import { formatP, formatSignificant } from '@/lib/format';
+import { TermShape } from './TermShape';
 
 interface TermBoardProps {
   readonly factors: readonly Factor[];
@@ -84,7 +85,13 @@ export function TermBoard({ factors, terms, answer, onChange }: TermBoardProps) 
               aria-pressed={isIn}
               onClick={() => onChange(toggled(factors, terms, name))}
             >
-              <span className="font-mark">{termSymbol(name)}</span>
+              <span className="flex items-center justify-between gap-2">
+                <span className="font-mark">{termSymbol(name)}</span>
+                <TermShape
+                  kind={row === 0 ? 'straight' : row - 1 === column ? 'square' : 'product'}
+                  estimate={isIn ? (term?.estimate ?? 0) : null}
+                />
+              </span>
               {isIn && term ? (
                 <>
                   <span className="mono">

@@ -134,7 +134,7 @@ export function People({ people, customers }: PeopleProps) {
     },
     {
       key: 'act',
-      header: '',
+      header: <span className="sr-only">Actions</span>,
       cell: (person) => (
         <span className="flex gap-4 justify-end">
           <button

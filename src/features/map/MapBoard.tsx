@@ -1,180 +1,149 @@
-import { fitRequestSchema } from '@shared/schemas/calc/fit';
 import type { RunJson } from '@shared/schemas/run';
-import type { SettingJson, SetPointKey } from '@shared/schemas/setPoint';
+import { setPointOf, type SettingJson, type SetPointKey } from '@shared/schemas/setPoint';
 import { snap } from '@shared/stats/coding/snap';
-import { constraintsOf, variedSettings } from '@shared/study/plan';
-import { chooseRequestOf, fitRequestOf, type Evidence } from '@shared/study/requests';
-import { deliveredSetting } from '@shared/study/results';
-import { useQueries, useQuery } from '@tanstack/react-query';
+import { constraintsOf } from '@shared/study/plan';
+import type { Evidence } from '@shared/study/requests';
 import { useDeferredValue, useState } from 'react';
-import { ContourMap } from '@/charts/ContourMap';
-import { ChartFrame } from '@/charts/Chart';
-import type { MapRun } from '@/charts/mapScales';
+import type { MapMove } from '@/charts/map/mapKeys';
+import type { MapInput } from '@/charts/map/mapInput';
 import { Notice } from '@/components/Notice';
-import { Panel } from '@/components/Panel';
 import { Segments } from '@/components/Segments';
 import { LoadingState } from '@/components/states';
-import { calculation } from '@/engine/engine';
-import { formatNumber } from '@/lib/format';
+import { formatNumber, formatPlain, withUnit } from '@/lib/format';
+import { exactGoals, modelledGoals } from './goalLines';
+import { heldWords, latticeOf, limitName, rangeOf, sectionEnds } from './mapGrid';
 import {
   axisWords,
   dialOf,
-  isOnSlice,
   limitsOf,
   mapAxes,
   middleSetting,
   numericFactors,
+  predictionAt,
   type MapModel,
 } from './mapModel';
-import {
-  COLUMNS,
-  evenly,
-  heldWords,
-  limitName,
-  rangeOf,
-  residualOf,
-  ROWS,
-  sectionEnds,
-} from './mapGrid';
-import { exactGoals, modelledGoals } from './goalLines';
+import { MapPanel } from './MapPanel';
+import { runsOnMap } from './mapRuns';
 import { SectionPanel, type SectionWay } from './SectionPanel';
 import { SetPointPanel } from './SetPointPanel';
+import { useChance, useSurfaces } from './useMapCalculations';
 
 interface MapBoardProps {
   readonly evidence: Evidence & { readonly runs: readonly RunJson[] };
   readonly models: readonly MapModel[];
 }
 
-interface MapBoardProps {
-  readonly evidence: Evidence & { readonly runs: readonly RunJson[] };
-  readonly models: readonly MapModel[];
+const NEXT_WAY: Readonly<Record<SectionWay, SectionWay>> = {
+  slanted: 'across',
+  across: 'up',
+  up: 'slanted',
+};
+
+const settingWords = (keys: readonly SetPointKey[], setting: SettingJson) =>
+  keys.map((key) => withUnit(formatPlain(setting[key]), setPointOf(key).unit)).join(', ');
+
+/** One scale for each response, wide enough for its runs and limits. */
+function scalesOf({ brief, runs }: MapBoardProps['evidence']) {
+  return Object.fromEntries(
+    brief.responses.map((response) => {
+      const values = runs.flatMap(({ results }) => results[response.key] ?? []);
+      const all = [...values, ...limitsOf(response).map(({ value }) => value)];
+      const [low, high] = [Math.min(...all), Math.max(...all)];
+      const pad = 0.1 * (high - low || 1);
+      return [response.key, [low - pad, high + pad] as const];
+    }),
+  );
+}
+
+/** The set-point and what moves it: a step of a dial, or a place on the map. */
+function useSetting(evidence: Evidence) {
+  const [setting, setSetting] = useState<SettingJson>(() => middleSetting(evidence));
+  const move = (key: SetPointKey, by: number) => {
+    const values = dialOf(evidence, key);
+    const wished = values.indexOf(setting[key]) + by;
+    const next = values[Math.max(0, Math.min(values.length - 1, wished))];
+    if (next !== undefined) setSetting((was) => ({ ...was, [key]: next }));
+  };
+  const place = (key: SetPointKey, value: number) => {
+    const [low, high] = rangeOf(evidence, key);
+    const inside = Math.max(low, Math.min(high, value));
+    const factor = numericFactors(evidence).find((each) => each.key === key);
+    setSetting((was) => ({ ...was, [key]: factor ? snap(factor, inside) : inside }));
+  };
+  return { setting, setSetting, move, place };
 }
 
 /** The map is the hero: one response over two set-points, with everything that limits it. */
 export function MapBoard({ evidence, models }: MapBoardProps) {
-  const { brief, envelope, runs } = evidence;
+  const { brief, runs } = evidence;
   const [shown, setShown] = useState(models[0]?.response.key ?? '');
-  const [setting, setSetting] = useState<SettingJson>(() => middleSetting(evidence));
   const [way, setWay] = useState<SectionWay>('slanted');
-  const model = models.find(({ response }) => response.key === shown) ?? models[0];
+  const { setting, setSetting, move, place } = useSetting(evidence);
+  const slice = useDeferredValue(setting);
   const axes = mapAxes(evidence);
   const [xKey, yKey] = axes;
-  const [xRange, yRange] = [rangeOf(evidence, xKey), rangeOf(evidence, yKey)];
-  const [xLow, xHigh] = xRange;
-  const [yLow, yHigh] = yRange;
-  const grid = { x: evenly(xLow, xHigh, COLUMNS), y: evenly(yLow, yHigh, ROWS) };
-  const others = brief.factors.map(({ key }) => key).filter((key) => !axes.includes(key));
-  const slice = useDeferredValue(setting);
-  const surfaces = useQueries({
-    queries: models.map(({ response, fit }) =>
-      calculation('surface', {
-        fit: fitRequestSchema.parse(fitRequestOf(evidence, response, fit)),
-        constraints: constraintsOf(brief, envelope),
-        x: { key: xKey, values: grid.x },
-        y: { key: yKey, values: grid.y },
-        // the axes are swept: only the others decide the slice
-        at: Object.fromEntries(
-          brief.factors.map(({ key }) => [
-            key,
-            others.includes(key) ? slice[key] : rangeOf(evidence, key)[0],
-          ]),
-        ),
-      }),
-    ),
-  });
-  const choices = Object.fromEntries(models.map(({ response, fit }) => [response.key, fit]));
-  const request = chooseRequestOf(evidence, choices);
-  const { data: chosen } = useQuery(
-    calculation('choose', {
-      ...request,
-      fixed: { ...request.fixed, ...variedSettings(brief, slice) },
-      support: 'region',
-      top: 1,
-    }),
+  const [xLow, xHigh] = rangeOf(evidence, xKey);
+  const [yLow, yHigh] = rangeOf(evidence, yKey);
+  const grid = latticeOf([xLow, xHigh], [yLow, yHigh]);
+  const surfaces = useSurfaces(evidence, models, axes, { grid, slice });
+  const chance = useChance(evidence, models, slice);
+  const at = Math.max(
+    0,
+    models.findIndex(({ response }) => response.key === shown),
   );
-  const at = models.findIndex(({ response }) => response.key === model?.response.key);
+  const model = models[at];
+  if (!model) return null;
+  const { response } = model;
   const surface = surfaces[at]?.data;
   const failure = surfaces.find(({ error }) => error)?.error;
-
-  const goals = [
-    ...modelledGoals(
-      models,
-      surfaces.map(({ data }) => data?.predicted ?? null),
-      shown,
-    ),
-    ...exactGoals(evidence, axes, grid, slice),
-  ];
-
-  if (!model) return null;
-  const { response, answer } = model;
-  const mapRuns = runs
-    .filter(
-      ({ status, results }) => status === 'recorded' && (results[response.key] ?? null) !== null,
-    )
-    .map((run): MapRun => {
-      const delivered = deliveredSetting(run.settings, run.actual);
-      const diagnosis = answer.diagnostics.find(({ id }) => String(id) === String(run.number));
-      return {
-        id: String(run.number),
-        x: delivered[xKey],
-        y: delivered[yKey],
-        residual: residualOf(diagnosis?.studentizedInternal),
-        isOnSlice: isOnSlice(evidence, axes, run, setting),
-      };
-    });
-  const move = (key: SetPointKey, by: number) => {
-    const values = dialOf(evidence, key);
-    const next =
-      values[Math.max(0, Math.min(values.length - 1, values.indexOf(setting[key]) + by))];
-    if (next !== undefined) setSetting((was) => ({ ...was, [key]: next }));
+  const others = brief.factors.map(({ key }) => key).filter((key) => !axes.includes(key));
+  const ends = sectionEnds(way, [xLow, xHigh], [yLow, yHigh], [setting[xKey], setting[yKey]]);
+  const limitNames = constraintsOf(brief, evidence.envelope).map(limitName(evidence.envelope));
+  const axis = (key: SetPointKey) => ({ label: axisWords(key).name, unit: axisWords(key).unit });
+  const map: MapInput | null = surface
+    ? {
+        x: { ...axis(xKey), values: grid.x },
+        y: { ...axis(yKey), values: grid.y },
+        z: surface.predicted,
+        unit: response.unit,
+        limits: surface.slack.map((margin, i) => ({
+          label: limitNames[i] ?? '',
+          // on a phone the figure alone
+          shortLabel: (limitNames[i] ?? '').replace(/^\D+/, ''),
+          margin,
+        })),
+        support: surface.spread,
+        runs: runsOnMap(evidence, model, axes, setting),
+        goals: [
+          ...modelledGoals(
+            models,
+            surfaces.map(({ data }) => data?.predicted ?? null),
+            response.key,
+          ),
+          ...exactGoals(evidence, axes, grid, slice),
+        ],
+        setPoint: { x: setting[xKey], y: setting[yKey] },
+        section: {
+          from: { x: ends[0][0], y: ends[0][1] },
+          to: { x: ends[1][0], y: ends[1][1] },
+        },
+      }
+    : null;
+  const { predicted } = predictionAt(model, evidence, setting);
+  const onMoved = ({ dx, dy, dz }: MapMove) => {
+    if (dx !== 0) move(xKey, dx);
+    if (dy !== 0) move(yKey, dy);
+    if (dz !== 0 && others[0]) move(others[0], dz);
   };
-  const pick = (u: number, v: number) => {
-    const settled = (key: SetPointKey, value: number, [low, high]: readonly [number, number]) => {
-      const factor = numericFactors(evidence).find((each) => each.key === key);
-      const inside = Math.max(low, Math.min(high, value));
-      return factor ? snap(factor, inside) : inside;
-    };
-    setSetting((was) => ({
-      ...was,
-      [xKey]: settled(xKey, u, xRange),
-      [yKey]: settled(yKey, v, yRange),
-    }));
-  };
-  const scales = Object.fromEntries(
-    brief.responses.map((each) => {
-      const values = runs.flatMap(({ results }) => results[each.key] ?? []);
-      const limits = limitsOf(each).map(({ value }) => value);
-      const all = [...values, ...limits];
-      const [low, high] = [Math.min(...all), Math.max(...all)];
-      const pad = 0.1 * (high - low || 1);
-      return [each.key, [low - pad, high + pad] as const];
-    }),
-  );
-  const ends = sectionEnds(way, xRange, yRange, [setting[xKey], setting[yKey]]);
-  const held = others.map(heldWords(setting));
-  const limitWords = constraintsOf(brief, envelope).map(limitName(envelope));
-  const rows = grid.y.flatMap((v, j) =>
-    j % 10 === 0
-      ? grid.x.flatMap((u, i) =>
-          i % 10 === 0
-            ? [
-                {
-                  u,
-                  v,
-                  value: surface?.predicted[j]?.[i] ?? null,
-                  isFeasible: surface?.feasible[j]?.[i] ?? false,
-                },
-              ]
-            : [],
-        )
-      : [],
-  );
   return (
     <div className="grid gap-4 desk:grid-cols-[minmax(0,1fr)_23rem] items-start">
       <div className="grid gap-4 min-w-0">
-        <Panel
-          name={response.name}
-          fact={`over ${axisWords(xKey).name.toLowerCase()} and ${axisWords(yKey).name.toLowerCase()}${held.length > 0 ? ` at ${held.join(', ')}` : ''}`}
+        <MapPanel
+          response={response}
+          map={map}
+          isFeasible={surface?.feasible ?? []}
+          reading={`${settingWords([yKey, xKey], setting)}: ${withUnit(formatNumber(predicted, 1), response.unit)}`}
+          fact={`over ${axisWords(xKey).name.toLowerCase()} and ${axisWords(yKey).name.toLowerCase()}${others.length > 0 ? ` at ${others.map(heldWords(setting)).join(', ')}` : ''}`}
           control={
             models.length > 1 && (
               <Segments
@@ -188,83 +157,16 @@ export function MapBoard({ evidence, models }: MapBoardProps) {
               />
             )
           }
+          onMoved={onMoved}
+          onPlaced={({ x, y }) => {
+            place(xKey, x);
+            place(yKey, y);
+          }}
+          onSwung={() => setWay(NEXT_WAY[way])}
         >
           {failure && <Notice tone="stop">{failure.message}</Notice>}
           {!surface && !failure && <LoadingState what="Drawing the map." />}
-          {surface && (
-            <div
-              onKeyDown={(event) => {
-                if (event.key.toLowerCase() !== 's') return;
-                setWay(way === 'slanted' ? 'across' : way === 'across' ? 'up' : 'slanted');
-              }}
-            >
-              <ChartFrame
-                label={`Contour map of ${response.name}`}
-                isInteractive
-                table={{
-                  columns: [
-                    {
-                      key: 'x',
-                      header: axisWords(xKey).name,
-                      unit: axisWords(xKey).unit,
-                      numeric: true,
-                      cell: ({ u }) => formatNumber(u, 1),
-                    },
-                    {
-                      key: 'y',
-                      header: axisWords(yKey).name,
-                      unit: axisWords(yKey).unit,
-                      numeric: true,
-                      cell: ({ v }) => formatNumber(v, 1),
-                    },
-                    {
-                      key: 'z',
-                      header: response.name,
-                      unit: response.unit,
-                      numeric: true,
-                      cell: ({ value }) => formatNumber(value, 1),
-                    },
-                    {
-                      key: 'f',
-                      header: 'Can be dialled in',
-                      cell: ({ isFeasible }) => (isFeasible ? 'yes' : 'no'),
-                    },
-                  ],
-                  rows,
-                  rowKey: ({ u, v }) => `${u} ${v}`,
-                }}
-              >
-                <ContourMap
-                  label={`Contour map of ${response.name}. Arrow keys move the set-point, page keys the ${others[0] ?? 'slice'}, S swings the section.`}
-                  x={{ ...axisWords(xKey), values: grid.x }}
-                  y={{ ...axisWords(yKey), values: grid.y }}
-                  predicted={surface.predicted}
-                  feasible={surface.feasible}
-                  limits={surface.slack.map((values, i) => ({
-                    values,
-                    words: limitWords[i] ?? '',
-                  }))}
-                  spread={surface.spread}
-                  runs={mapRuns}
-                  goals={goals}
-                  setPoint={{ x: setting[xKey], y: setting[yKey] }}
-                  section={ends}
-                  onPick={({ x, y }) => pick(x, y)}
-                  onMove={({ dx, dy, dz, isFar }) => {
-                    const times = isFar ? 5 : 1;
-                    if (dx !== 0) move(xKey, dx * times);
-                    if (dy !== 0) move(yKey, dy * times);
-                    if (dz !== 0 && others[0]) move(others[0], dz * times);
-                  }}
-                />
-              </ChartFrame>
-              <p className="text-1 text-ink-3">
-                Rings: runs, filled by their residual; small rings: runs on another slice. Teeth:
-                the side where a goal holds. Hatched: cannot be dialled in. Dotted: few data.
-              </p>
-            </div>
-          )}
-        </Panel>
+        </MapPanel>
         <SectionPanel
           evidence={evidence}
           model={model}
@@ -280,8 +182,8 @@ export function MapBoard({ evidence, models }: MapBoardProps) {
         evidence={evidence}
         models={models}
         setting={setting}
-        chance={chosen?.best[0] ?? null}
-        scales={scales}
+        chance={chance}
+        scales={scalesOf(evidence)}
         onChange={setSetting}
       />
     </div>

@@ -2,11 +2,12 @@ import { setPointOf, type SettingJson, type SetPointKey } from '@shared/schemas/
 import type { Evidence, ModelledRun } from '@shared/study/requests';
 import { deliveredSetting } from '@shared/study/results';
 import { Chart } from '@/charts/Chart';
-import { sectionOption, type SectionPoint } from '@/charts/sectionLine';
+import { sectionOption, type SectionPoint } from '@/charts/sectionOption';
 import { Panel } from '@/components/Panel';
 import { Segments } from '@/components/Segments';
 import { formatInterval, formatNumber, withUnit } from '@/lib/format';
 import { limitsOf, predictionAt, type MapModel } from './mapModel';
+import { residualShareOf } from './mapRuns';
 
 export type SectionWay = 'across' | 'up' | 'slanted';
 export type SectionEnds = readonly [readonly [number, number], readonly [number, number]];
@@ -53,19 +54,45 @@ export function SectionPanel(props: SectionPanelProps) {
   const [a, b] = ends;
   const words = (x: number, y: number) =>
     `${withUnit(formatNumber(y, 0), setPointOf(yKey).unit)}, ${withUnit(formatNumber(x, 0), setPointOf(xKey).unit)}`;
-  const points = Array.from({ length: POINTS }, (_, i): SectionPoint => {
+  const points = Array.from({ length: POINTS }, (_, i): SectionPoint & { words: string } => {
     const share = i / (POINTS - 1);
     const x = a[0] + share * (b[0] - a[0]);
     const y = a[1] + share * (b[1] - a[1]);
     const at = predictionAt(model, evidence, { ...setting, [xKey]: x, [yKey]: y });
-    return { share, words: words(x, y), ...at };
+    const bound = (value: number | null) => value ?? at.predicted;
+    return {
+      share,
+      x,
+      y,
+      words: words(x, y),
+      mean: at.predicted,
+      ciLow: bound(at.ciLow),
+      ciHigh: bound(at.ciHigh),
+      piLow: bound(at.piLow),
+      piHigh: bound(at.piHigh),
+    };
   });
   const near = runs.flatMap((run) => {
     const value = run.results[response.key] ?? null;
     if (run.status !== 'recorded' || value === null) return [];
     const delivered = deliveredSetting(run.settings, run.actual);
     const { share, off } = projected([delivered[xKey], delivered[yKey]], ends, spans);
-    return share < 0 || share > 1 || off > NEAR ? [] : [{ id: String(run.number), share, value }];
+    if (share < 0 || share > 1 || off > NEAR) return [];
+    // moved onto the section: what the run was above the model stays above it
+    const foot = {
+      ...setting,
+      [xKey]: a[0] + share * (b[0] - a[0]),
+      [yKey]: a[1] + share * (b[1] - a[1]),
+    };
+    const residual = value - predictionAt(model, evidence, delivered).predicted;
+    return [
+      {
+        id: run.number,
+        share,
+        value: predictionAt(model, evidence, foot).predicted + residual,
+        residualShare: residualShareOf(model, run),
+      },
+    ];
   });
   const here = projected([setting[xKey], setting[yKey]], ends, spans);
   return (
@@ -87,20 +114,23 @@ export function SectionPanel(props: SectionPanelProps) {
     >
       <Chart
         label={`${response.name} along the section line with its bands`}
-        height={280}
-        option={(tokens) =>
+        height={210}
+        option={(tokens, size) =>
           sectionOption(
             {
+              name: `${response.name}${response.unit && `, ${response.unit}`}`,
+              x: { unit: setPointOf(xKey).unit, digits: 1 },
+              y: { unit: setPointOf(yKey).unit, digits: 0 },
               points,
               runs: near,
-              limits: limitsOf(response).map(({ value }) => ({
+              limits: limitsOf(response).map(({ value, holdsAbove }) => ({
                 value,
-                words: withUnit(String(value), response.unit),
+                side: holdsAbove ? 'atLeast' : 'atMost',
               })),
               setPointShare: here.share >= 0 && here.share <= 1 ? here.share : null,
-              yName: `${response.name}${response.unit && `, ${response.unit}`}`,
             },
             tokens,
+            size,
           )
         }
         table={{
@@ -111,7 +141,7 @@ export function SectionPanel(props: SectionPanelProps) {
               header: 'Predicted',
               unit: response.unit,
               numeric: true,
-              cell: ({ predicted }) => formatNumber(predicted, 1),
+              cell: ({ mean }) => formatNumber(mean, 1),
             },
             {
               key: 'ci',

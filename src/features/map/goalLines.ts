@@ -1,26 +1,25 @@
 import type { SettingJson, SetPointKey } from '@shared/schemas/setPoint';
 import type { Evidence } from '@shared/study/requests';
-import type { GoalLine } from '@/charts/mapScales';
+import type { Axes, Grid } from '@/charts/grid';
+import type { MapGoal } from '@/charts/map/mapInput';
 import { formatPlain, withUnit } from '@/lib/format';
 import { computedAt, limitsOf, type MapModel } from './mapModel';
-
-type Rows = readonly (readonly number[])[];
 
 /** The limits of modelled responses as lines on the map; those not shown bring their name. */
 export function modelledGoals(
   models: readonly MapModel[],
-  surfaces: readonly (Rows | null)[],
+  surfaces: readonly (Grid | null)[],
   shown: string,
-): GoalLine[] {
+): MapGoal[] {
   return models.flatMap(({ response }, i) => {
     const values = surfaces[i];
     if (!values) return [];
     const name = response.key === shown ? '' : `${response.name} `;
     return limitsOf(response).map(({ value, holdsAbove }) => ({
-      words: `${name}${withUnit(formatPlain(value), response.unit)}`,
+      label: `${name}${withUnit(formatPlain(value), response.unit)}`,
       values,
       level: value,
-      holdsAbove,
+      side: holdsAbove ? 'atLeast' : 'atMost',
     }));
   });
 }
@@ -29,19 +28,19 @@ export function modelledGoals(
 export function exactGoals(
   evidence: Evidence,
   [xKey, yKey]: readonly [SetPointKey, SetPointKey],
-  grid: { readonly x: readonly number[]; readonly y: readonly number[] },
+  grid: Axes,
   slice: SettingJson,
-): GoalLine[] {
+): MapGoal[] {
   return evidence.brief.responses.flatMap((response) => {
     if (computedAt(evidence, response, slice) === null) return [];
     const values = grid.y.map((v) =>
       grid.x.map((u) => computedAt(evidence, response, { ...slice, [xKey]: u, [yKey]: v }) ?? 0),
     );
     return limitsOf(response).map(({ value, holdsAbove }) => ({
-      words: withUnit(formatPlain(value), response.unit),
+      label: withUnit(formatPlain(value), response.unit),
       values,
       level: value,
-      holdsAbove,
+      side: holdsAbove ? 'atLeast' : 'atMost',
     }));
   });
 }

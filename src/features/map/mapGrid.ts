@@ -1,31 +1,36 @@
 import type { ConstraintInput } from '@shared/schemas/calc/common';
 import type { EnvelopeJson } from '@shared/schemas/rig';
 import { setPointOf, type SettingJson, type SetPointKey } from '@shared/schemas/setPoint';
-import { formatPlain, withUnit } from '@/lib/format';
 import type { Evidence } from '@shared/study/requests';
+import type { Axes } from '@/charts/grid';
+import { formatPlain, withUnit } from '@/lib/format';
 import type { SectionEnds, SectionWay } from './SectionPanel';
 
-export const COLUMNS = 61;
-export const ROWS = 51;
+export type Range = readonly [number, number];
 
-/** Full at two spreads. */
-export const residualOf = (studentized: number | null | undefined) =>
-  studentized === null || studentized === undefined ? null : studentized / 2;
+const COLUMNS = 61;
+const ROWS = 51;
 
-export const evenly = (low: number, high: number, n: number) =>
+const evenly = (low: number, high: number, n: number) =>
   Array.from({ length: n }, (_, i) => low + ((high - low) * i) / (n - 1));
 
 /** The Brief’s range of a set-point. */
-export function rangeOf({ brief }: Evidence, key: SetPointKey): readonly [number, number] {
+export function rangeOf({ brief }: Evidence, key: SetPointKey): Range {
   const factor = brief.factors.find((each) => each.key === key);
   return [factor?.low ?? 0, factor?.high ?? 1];
 }
 
+/** The lattice that the map is drawn from: both ranges, ends included. */
+export const latticeOf = (x: Range, y: Range): Axes => ({
+  x: evenly(...x, COLUMNS),
+  y: evenly(...y, ROWS),
+});
+
 /** Where A and A′ lie. */
 export function sectionEnds(
   way: SectionWay,
-  x: readonly [number, number],
-  y: readonly [number, number],
+  x: Range,
+  y: Range,
   at: readonly [number, number],
 ): SectionEnds {
   if (way === 'across')
@@ -38,8 +43,7 @@ export function sectionEnds(
       [at[0], y[0]],
       [at[0], y[1]],
     ];
-  const inset = (range: readonly [number, number], share: number) =>
-    range[0] + share * (range[1] - range[0]);
+  const inset = (range: Range, share: number) => range[0] + share * (range[1] - range[0]);
   return [
     [inset(x, 0.08), inset(y, 0.08)],
     [inset(x, 0.92), inset(y, 0.96)],

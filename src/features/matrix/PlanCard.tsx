@@ -4,7 +4,7 @@ import type { StudyJson } from '@shared/schemas/study';
 import type { EnvelopeJson } from '@shared/schemas/rig';
 import { Chart } from '@/charts/Chart';
 import { Pegs } from '@/charts/Pegs';
-import { varianceCurveOption } from '@/charts/varianceCurve';
+import { spreadCurveOption } from '@/charts/spreadCurveOption';
 import { classes } from '@/lib/classes';
 import { formatDuration, formatMass, formatNumber } from '@/lib/format';
 import { floorOf, pegsOf, type LaidOut } from './pegs';
@@ -103,7 +103,9 @@ function Curve({
     <Chart
       label="Spread of a prediction over run-to-run spread, sorted over the region"
       height={120}
-      option={(tokens) => varianceCurveOption({ fractions: variance.fractions, ratios }, tokens)}
+      option={(tokens) =>
+        spreadCurveOption({ fractions: variance.fractions, spreads: ratios }, tokens)
+      }
       table={{
         columns: [
           {

@@ -70,7 +70,7 @@ export function Ranking({ brief, best, candidates, picked, why, onPick, onTake }
   const columns: Column<Row>[] = [
     {
       key: 'letter',
-      header: '',
+      header: <span className="sr-only">Letter</span>,
       cell: ({ setting }) => {
         const letter = letterOf(setting);
         return letter ? <span className="letter">{letter}</span> : null;
@@ -113,7 +113,7 @@ export function Ranking({ brief, best, candidates, picked, why, onPick, onTake }
     },
     {
       key: 'act',
-      header: '',
+      header: <span className="sr-only">Actions</span>,
       cell: ({ setting }) => (
         <span className="grid gap-2 justify-items-end">
           <button type="button" className="btn" onClick={() => onPick(setting)}>

@@ -4,7 +4,8 @@ import type { ResponseJson } from '@shared/schemas/response';
 import type { BriefJson } from '@shared/schemas/study';
 import { variedSettings } from '@shared/study/plan';
 import { Chart } from '@/charts/Chart';
-import { tradeOffOption } from '@/charts/tradeOff';
+import type { ChartLimit } from '@/charts/limitLine';
+import { tradeOffOption } from '@/charts/tradeOffOption';
 import { Panel } from '@/components/Panel';
 import { formatNumber, formatPlain } from '@/lib/format';
 
@@ -14,8 +15,23 @@ interface TradeOffProps {
   readonly candidates: readonly CandidateJson[];
 }
 
-const limitOf = ({ aim, low, high }: ResponseJson) =>
-  aim === 'minimise' ? high : aim === 'maximise' ? low : null;
+/** Where a goal begins to hold, and on which side. */
+function limitsOf({ aim, low, high }: ResponseJson): ChartLimit[] {
+  const floor =
+    aim === 'minimise' || low === null ? [] : [{ value: low, side: 'atLeast' as const }];
+  const ceiling =
+    aim === 'maximise' || high === null ? [] : [{ value: high, side: 'atMost' as const }];
+  return [...floor, ...ceiling];
+}
+
+/** Nothing better on both at once, when less of x is wanted; ascending in x. */
+function frontOf(points: readonly { x: number; y: number }[], y: ResponseJson) {
+  const sign = y.aim === 'minimise' ? -1 : 1;
+  const front: { x: number; y: number }[] = [];
+  for (const point of [...points].sort((a, b) => a.x - b.x || sign * (b.y - a.y)))
+    if (sign * point.y > sign * (front.at(-1)?.y ?? -sign * Infinity)) front.push(point);
+  return front;
+}
 
 const holdsAt = ({ aim, low, high }: ResponseJson, value: number | undefined) => {
   if (value === undefined || aim === 'observe') return true;
@@ -48,7 +64,7 @@ export function TradeOff({ brief, tradeOff, candidates }: TradeOffProps) {
     const at = points.find((point) =>
       Object.entries(varied).every(([key, value]) => point.settings[key] === value),
     );
-    return at ? [{ letter, x: at.x, y: at.y }] : [];
+    return at ? [{ letter, x: at.x, y: at.y, isReferred: false }] : [];
   });
   return (
     <Panel
@@ -58,15 +74,17 @@ export function TradeOff({ brief, tradeOff, candidates }: TradeOffProps) {
       <Chart
         label={`Trade-off of ${y.name} against ${x.name}`}
         height={300}
-        option={(tokens) =>
+        option={(tokens, size) =>
           tradeOffOption(
             {
-              x: { name: name(x), limit: limitOf(x) },
-              y: { name: name(y), limit: limitOf(y) },
+              x: { name: name(x), limits: limitsOf(x) },
+              y: { name: name(y), limits: limitsOf(y) },
               points,
+              front: x.aim === 'minimise' ? frontOf(points, y) : [],
               candidates: placed,
             },
             tokens,
+            size,
           )
         }
         table={{
@@ -103,7 +121,7 @@ export function TradeOff({ brief, tradeOff, candidates }: TradeOffProps) {
         {others.length > 0
           ? `Filled where ${others.map(({ name: each }) => each.toLowerCase()).join(' and ')} ${others.length > 1 ? 'hold' : 'holds'} too. `
           : ''}
-        Lines: the limits.
+        Toothed: the limits. Stairs: nothing better for that much.
       </p>
     </Panel>
   );

@@ -30,7 +30,7 @@ function factsOf(study: StudyJson): string {
 export function StudyFrame({ study, here, action, children }: StudyFrameProps) {
   useTitle(`${STAGE_NAMES[here]} · ${study.code}`);
   return (
-    <>
+    <main>
       <div className="head">
         <div className="min-w-0">
           <h1>{study.title}</h1>
@@ -43,7 +43,7 @@ export function StudyFrame({ study, here, action, children }: StudyFrameProps) {
         </div>
         <div className="no-print">{action}</div>
       </div>
-      <main className="page">{children}</main>
-    </>
+      <div className="page">{children}</div>
+    </main>
   );
 }
