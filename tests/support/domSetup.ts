@@ -15,6 +15,7 @@ Object.assign(Element.prototype, {
   hasPointerCapture: () => false,
   scrollIntoView: () => undefined,
 });
+Object.assign(HTMLCanvasElement.prototype, { getContext: () => null });
 Object.assign(window, {
   matchMedia: (query: string) => Object.assign(new EventTarget(), { matches: false, media: query }),
 });
