@@ -1,8 +1,7 @@
 import type { Browser, Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { runPracticeRig } from '@shared/comminution/practiceRig/runPracticeRig';
-import { APERTURES_MM } from '@shared/comminution/practiceRig/sizeClasses';
 import { collectErrors, expectAccessible, openBrowser } from '@tests/support/browser';
+import { PRACTICE_HEADINGS, practiceLine } from '@tests/support/practiceCsv';
 import { makeFolder, startServer, type RunningServer } from '@tests/support/testServer';
 
 /** The whole job in a browser, by role selectors and keyboard: from sample to signed settings. */
@@ -40,38 +39,6 @@ async function fillSetPoint(page: Page, name: string, low: string, high: string)
   await page.getByLabel(`${name} from`).fill(low);
   await page.getByLabel(`${name} to`, { exact: true }).fill(high);
 }
-
-/** One line of CSV with semicolons and decimal commas, as the practice rig would have given it. */
-function csvLine(run: { number: number; voltage: number; gap: number; pulses: number }): string {
-  const result = runPracticeRig({
-    material: 'granite',
-    voltageKv: run.voltage,
-    gapMm: run.gap,
-    pulses: run.pulses,
-    frequencyHz: 2,
-    seed: 900 + run.number,
-  });
-  const openings = [16, 8, 4, 2, 1, 0.5, 0.25, 0.125, 0.063];
-  const retained = openings.map(() => 0);
-  let pan = 0;
-  result.masses.forEach((mass, i) => {
-    const at = openings.findIndex((mm) => APERTURES_MM[i]! >= mm);
-    if (at < 0) pan += mass;
-    else retained[at] = (retained[at] ?? 0) + mass;
-  });
-  const comma = (value: number) => value.toFixed(2).replace('.', ',');
-  return [
-    run.number,
-    '300,0',
-    comma(result.beforeSievingG),
-    run.pulses,
-    ...retained.map(comma),
-    comma(pan),
-  ].join(';');
-}
-
-const HEADINGS =
-  'run;feed mass [g];before sieving [g];delivered pulses;16 mm;8 mm;4 mm;2 mm;1 mm;0,5 mm;0,25 mm;0,125 mm;63 µm;pan';
 
 /** Run number and set-points of the open runs, from the table on the bench page. */
 async function openRuns(page: Page) {
@@ -165,13 +132,13 @@ describe('from sample to signed settings', () => {
     for (const check of await page.getByRole('checkbox').all()) await check.click();
     await expectAccessible(page, 'run sheet');
     await button(page, 'Checked: on to the record').click();
-    const cells = csvLine(runs[0]!).split(';');
-    await page.getByLabel('Dry feed').fill(cells[1]!);
-    await page.getByLabel('Dry product before sieving').fill(cells[2]!);
+    const cells = practiceLine(runs[0]!, 900).split(';');
+    await page.getByLabel('Dry feed').fill(cells[4]!);
+    await page.getByLabel('Dry product before sieving').fill(cells[5]!);
     await expectAccessible(page, 'run record');
     await button(page, 'On to the sieves').click();
     await page.getByLabel('16\u202Fmm retained, mass in g').focus();
-    for (const mass of cells.slice(4)) {
+    for (const mass of cells.slice(7)) {
       await page.keyboard.type(mass);
       await page.keyboard.press('Enter');
     }
@@ -203,7 +170,7 @@ describe('from sample to signed settings', () => {
 
     const rest = await openRuns(page);
     expect(rest).toHaveLength(18);
-    const csv = [HEADINGS, ...rest.map(csvLine)].join('\r\n');
+    const csv = [PRACTICE_HEADINGS, ...rest.map((run) => practiceLine(run, 900))].join('\r\n');
     await page
       .getByLabel('CSV file')
       .setInputFiles({ name: 'runs.csv', mimeType: 'text/csv', buffer: Buffer.from(csv) });
