@@ -3,7 +3,7 @@
 import { randomUUID } from 'node:crypto';
 import { readFileSync } from 'node:fs';
 
-const address = process.argv[2] ?? 'http://127.0.0.1:4300';
+const address = process.argv[2] ?? 'http://127.0.0.1:4173';
 const read = (name) => readFileSync(new URL(name, import.meta.url), 'utf8');
 const { sample, rig, sieveStack, brief, plan, models } = JSON.parse(read('study.json'));
 

@@ -2,7 +2,7 @@ import { StatsError } from '../stats/errors';
 import { inRunOrder } from '../stats/design/arrange';
 import { informationOf } from '../stats/design/designMatrix';
 import { aliasChains, placesOf, resolutionOf, type EffectWord } from '../stats/design/effectWord';
-import { outsidePoints, refuseOutside, settle, type Settled } from '../stats/design/settle';
+import { refuseOutside, settle, splitByLimits, type Settled } from '../stats/design/settle';
 import { cholesky, lnDeterminant } from '../stats/linalg/cholesky';
 import { modelMatrix, type Point } from '../stats/model/modelMatrix';
 import { termsOf, type Term } from '../stats/model/term';
@@ -19,7 +19,7 @@ const OPTIMAL = 'an optimal design, which stays inside the limits';
 function fits(request: DesignRequest): boolean {
   try {
     const settled = settledPoints(request, buildDesign(request));
-    return outsidePoints(request.factors, request.constraints, settled).length === 0;
+    return splitByLimits(request.factors, request.constraints, settled).outside.length === 0;
   } catch (error) {
     if (error instanceof StatsError) return false;
     throw error;
@@ -154,8 +154,8 @@ export function designAnswer(request: DesignRequest): DesignAnswer {
   checkRunCount(built.points.length);
   const settled = settledPoints(request, built);
   const planned = settled.filter((_, i) => built.points[i]!.pointType !== 'included');
-  const outside = outsidePoints(factors, constraints, planned);
-  if (outside.length > 0) refuseOutside(factors, outside, alternativesTo(request));
+  const split = splitByLimits(factors, constraints, planned);
+  if (split.outside.length > 0) refuseOutside(factors, split, alternativesTo(request));
   const placed = built.points.map(({ block, standardOrder, pointType }, i) => ({
     block,
     standardOrder,

@@ -8,11 +8,13 @@ interface PegsProps {
   readonly pegs: readonly Peg[];
   /** The part of the floor that can be dialled in: corners of a polygon, 0…1. */
   readonly floor: readonly (readonly [number, number])[];
+  /** The ranges asked for, where settings lie beyond them. */
+  readonly ranges?: readonly (readonly [number, number])[] | null;
   readonly label: string;
 }
 
 /** Settings as pegs on the settable floor: the height is the third set-point, ×6 are repeats. */
-export function Pegs({ pegs, floor, label }: PegsProps) {
+export function Pegs({ pegs, floor, ranges = null, label }: PegsProps) {
   const id = useId();
   const slab = [onSlab(0, 0), onSlab(1, 0), onSlab(1, 1), onSlab(0, 1)] as const;
   return (
@@ -31,6 +33,13 @@ export function Pegs({ pegs, floor, label }: PegsProps) {
         <path
           d={`${pathOf(floor.map(([x, y]) => onSlab(x, y)))}Z`}
           className="fill-map-1 stroke-line-strong"
+        />
+      )}
+      {ranges && (
+        <path
+          d={`${pathOf(ranges.map(([x, y]) => onSlab(x, y)))}Z`}
+          strokeDasharray="4 3"
+          className="fill-none stroke-ink-3"
         />
       )}
       <Thickness corners={[slab[0], slab[1], slab[2]]} />

@@ -88,20 +88,21 @@ export interface OutsidePoint {
   readonly why: string;
 }
 
-/** The settings that leave the hard envelope or break a limit, doubles removed. */
-export function outsidePoints(
+/** The settings that can be run and those that leave the hard envelope or break a limit, doubles removed. */
+export function splitByLimits(
   factors: readonly Factor[],
   constraints: readonly Constraint[],
   all: readonly { readonly settings: Readonly<Record<string, Setting>> }[],
-): OutsidePoint[] {
-  const seen = new Set<string>();
-  return all.flatMap(({ settings }) => {
-    const key = JSON.stringify(settings);
-    if (seen.has(key)) return [];
-    seen.add(key);
+): { inside: OutsidePoint['settings'][]; outside: OutsidePoint[] } {
+  const inside: OutsidePoint['settings'][] = [];
+  const outside: OutsidePoint[] = [];
+  const distinct = new Map(all.map(({ settings }) => [JSON.stringify(settings), settings]));
+  for (const settings of distinct.values()) {
     const why = brokenBy(factors, constraints, settings);
-    return why === null ? [] : [{ settings, why }];
-  });
+    if (why === null) inside.push(settings);
+    else outside.push({ settings, why });
+  }
+  return { inside, outside };
 }
 
 const NAMED = 4;
@@ -109,11 +110,12 @@ const NAMED = 4;
 /**
  * Refuses a design with points that cannot be run, naming them and what to choose instead.
  *
- * @throws StatsError `outside-envelope`, with the points in `details`.
+ * @throws StatsError `outside-envelope`, in its details the `points` with their reasons, what lies `inside`
+ *   and the `alternatives`.
  */
 export function refuseOutside(
   factors: readonly Factor[],
-  outside: readonly OutsidePoint[],
+  { inside, outside }: ReturnType<typeof splitByLimits>,
   alternatives: readonly string[],
 ): never {
   const named = outside
@@ -124,6 +126,6 @@ export function refuseOutside(
   throw new StatsError(
     'outside-envelope',
     `${count} of this design cannot be run: ${named.join('; ')}${more}. Choose ${alternatives.join(', ')}, or narrower ranges.`,
-    { points: outside.map(({ settings }) => settings), alternatives },
+    { points: outside, inside, alternatives },
   );
 }

@@ -7,8 +7,10 @@ import { Pegs } from '@/charts/Pegs';
 import { spreadCurveOption } from '@/charts/spreadCurveOption';
 import { classes } from '@/lib/classes';
 import { formatDuration, formatMass, formatNumber } from '@/lib/format';
-import { floorOf, pegsOf, type LaidOut } from './pegs';
+import { floorOf, pegsOf, rangesOn, spansOf, type LaidOut } from './pegs';
+import { costOfRuns, type PlanCost } from './costOfRuns';
 import type { PlanChoice } from './plans';
+import type { Refusal } from './refusal';
 import { termSymbol } from '@/lib/termSymbol';
 
 type Brief = NonNullable<StudyJson['brief']>;
@@ -20,13 +22,13 @@ export interface PlanCardProps {
   readonly leftG: number;
   readonly design: DesignAnswer | null;
   readonly evaluation: EvaluateAnswer | null;
-  /** Why it cannot be had, and its points with the limits that they break. */
-  readonly refusal: { readonly message: string; readonly points: readonly LaidOut[] } | null;
+  readonly refusal: Refusal | null;
   readonly isPicked: boolean;
   readonly onPick: () => void;
 }
 
 const GOOD_POWER = 0.8;
+const LIMITS_SHOWN = 4;
 
 /** Filled: found; half: only if larger, or not judged; crossed: not separable. */
 function TermChips({ evaluation }: { readonly evaluation: EvaluateAnswer }) {
@@ -60,26 +62,21 @@ function sentenceOf(evaluation: EvaluateAnswer): string {
   return `All ${all} terms; ${weak.map(({ term }) => termSymbol(term)).join(', ')} only if larger than the change that matters.`;
 }
 
-function Costs({
-  brief,
-  runs,
-  leftG,
-}: {
-  readonly brief: Brief;
-  readonly runs: number;
-  readonly leftG: number;
-}) {
-  const massG = runs * brief.batchMassG;
+function Costs({ cost, leftG }: { readonly cost: PlanCost; readonly leftG: number }) {
   return (
     <dl className="facts">
       <dt>Runs</dt>
-      <dd>{runs}</dd>
+      <dd>{cost.runs}</dd>
       <dt>Sample</dt>
-      <dd>
-        {formatMass(massG)} <small>of {formatMass(leftG)} left</small>
+      <dd className={cost.massG > leftG ? 'text-stop' : ''}>
+        {formatMass(cost.massG)} <small>of {formatMass(leftG)} left</small>
       </dd>
       <dt>Bench time</dt>
-      <dd>{formatDuration(60 * runs * brief.handlingMinutes)}</dd>
+      <dd>{formatDuration(cost.timeS)}</dd>
+      <dt>Stored energy</dt>
+      <dd>
+        {formatNumber(cost.energyJ / 1000, 0)} <small>kJ</small>
+      </dd>
     </dl>
   );
 }
@@ -128,42 +125,62 @@ function Curve({
   );
 }
 
+/** In the place of the costs: why there are none. */
+function Waiting({ refusal }: { readonly refusal: Refusal | null }) {
+  if (!refusal) return <p className="text-2 text-ink-3">Working it out …</p>;
+  return (
+    <div className="grid gap-2 text-2 text-ink-2 content-start">
+      <p>{refusal.message}</p>
+      <ul className="list-none p-0 m-0 grid gap-1">
+        {refusal.limits.slice(0, LIMITS_SHOWN).map((limit) => (
+          <li key={limit}>{limit}</li>
+        ))}
+        {refusal.limits.length > LIMITS_SHOWN && (
+          <li>And {refusal.limits.length - LIMITS_SHOWN} more.</li>
+        )}
+      </ul>
+    </div>
+  );
+}
+
 /** One plan: what it costs, what it can tell, and how evenly it predicts. */
 export function PlanCard(props: PlanCardProps) {
   const { choice, brief, envelope, leftG, design, evaluation, refusal, isPicked, onPick } = props;
   const laidOut: readonly LaidOut[] =
-    refusal?.points ?? design?.runs.map(({ settings }) => ({ settings, broken: [] })) ?? [];
+    refusal?.points ?? design?.runs.map(({ settings }) => ({ settings, isBroken: false })) ?? [];
+  const spans = spansOf(brief, laidOut);
   return (
     <article className={classes('plan', isPicked && 'picked')} aria-label={choice.name}>
-      <header className="flex items-center gap-3">
+      <header>
         <h2 className="font-head flex-1">{choice.name}</h2>
         {refusal ? (
           <span className="text-stop text-2">cannot be frozen</span>
         ) : (
           <button
             type="button"
-            className={classes('btn', isPicked && 'font-head')}
+            className={classes('link text-2', isPicked && 'font-head')}
             aria-pressed={isPicked}
             onClick={onPick}
             disabled={!design}
           >
-            {isPicked ? 'Picked' : 'Pick'}
+            {isPicked ? 'picked' : 'Pick'}
             <span className="sr-only"> {choice.name}</span>
           </button>
         )}
       </header>
       <p className="text-2 text-ink-2">{choice.words}</p>
-      <div>
+      <div className="!py-0">
         <Pegs
           pegs={pegsOf(brief, laidOut)}
-          floor={floorOf(brief, envelope)}
+          floor={floorOf(brief, envelope, spans)}
+          ranges={rangesOn(spans, brief)}
           label={`${laidOut.length} settings of ${choice.name}: gap across, voltage deep, pulses high`}
         />
       </div>
       {design ? (
-        <Costs brief={brief} runs={design.runs.length} leftG={leftG} />
+        <Costs cost={costOfRuns(brief, envelope, design.runs)} leftG={leftG} />
       ) : (
-        <div className="text-2 text-ink-2">{refusal ? refusal.message : 'Working it out …'}</div>
+        <Waiting refusal={refusal} />
       )}
       <div className="grid gap-2 content-start">
         {evaluation && (

@@ -1,144 +1,126 @@
-import { designRequestSchema } from '@shared/schemas/calc/design';
-import type { PlanInput } from '@shared/schemas/matrix';
+import type { EnvelopeJson } from '@shared/schemas/rig';
 import type { StudyJson } from '@shared/schemas/study';
-import { constraintsOf, factorsOf } from '@shared/study/plan';
-import { designRequestOf } from '@shared/study/requests';
-import { useQueries } from '@tanstack/react-query';
-import { useState } from 'react';
+import { Link } from 'react-router-dom';
 import { Field } from '@/components/Field';
 import { Notice } from '@/components/Notice';
-import { calculation, CalculationError } from '@/engine/engine';
-import { FreezePanel } from './FreezePanel';
+import { formatPlain } from '@/lib/format';
+import { PickedRuns } from './PickedRuns';
 import { PlanCard } from './PlanCard';
-import type { LaidOut } from './pegs';
-import { planChoices, planOf } from './plans';
+import { refusalOf } from './refusal';
+import type { Plans } from './usePlans';
+
+type Brief = NonNullable<StudyJson['brief']>;
 
 interface PlanComparisonProps {
   readonly study: StudyJson;
-  readonly brief: NonNullable<StudyJson['brief']>;
-  readonly rig: NonNullable<StudyJson['rig']>;
-  /** Why this person may not freeze, or null. */
-  readonly why: string | null;
-  readonly onFrozen: () => void;
+  readonly brief: Brief;
+  readonly envelope: EnvelopeJson;
+  readonly plans: Plans;
 }
 
-const wholeNumber = (text: string, most: number): number | null => {
-  const value = /^\d{1,10}$/.test(text.trim()) ? Number(text) : NaN;
-  return Number.isFinite(value) && value <= most ? value : null;
-};
-
-function refusalOf(error: Error | null): { message: string; points: LaidOut[] } | null {
-  if (!error) return null;
-  const points = error instanceof CalculationError ? error.details['points'] : undefined;
-  // made by the engine for `outside-envelope`, and for nothing else
-  return { message: error.message, points: (points as LaidOut[] | undefined) ?? [] };
+/** What is asked, and against which spread it has to be seen. */
+function Question({ study, brief }: { readonly study: StudyJson; readonly brief: Brief }) {
+  const [first] = brief.responses;
+  const unit = first?.unit === '%' ? 'points' : (first?.unit ?? '');
+  const figure = (value: number | null) =>
+    value === null ? 'not stated' : `${formatPlain(value)} ${unit}`;
+  return (
+    <dl className="ask">
+      <div>
+        <dt>Question</dt>
+        <dd>{study.question || 'not written down'}</dd>
+      </div>
+      <div>
+        <dt>Effect that matters</dt>
+        <dd>{figure(brief.effectThatMatters)}</dd>
+      </div>
+      <div>
+        <dt>Run-to-run spread</dt>
+        <dd>{figure(brief.expectedSpread)}</dd>
+      </div>
+      <Link className="link text-2" to={`/studies/${study.id}/brief`}>
+        Change the Brief
+      </Link>
+    </dl>
+  );
 }
 
-/** The plans side by side, the picked one with its run list and the button that freezes it. */
-export function PlanComparison({ study, brief, rig, why, onFrozen }: PlanComparisonProps) {
-  const { envelope } = rig;
-  const [centreText, setCentreText] = useState('6');
-  const [seedText, setSeedText] = useState(() => String(1 + (study.id % 90)));
-  const [pickedId, setPickedId] = useState<string | null>(null);
-  const centrePoints = wholeNumber(centreText, 30);
-  const seed = wholeNumber(seedText, 4_294_967_295);
-  const choices = planChoices(brief.factors.length);
-  const plans = choices.map((choice) =>
-    planOf(choice, { centrePoints: centrePoints ?? 6, seed: seed ?? 7 }),
+function Keys({ brief }: { readonly brief: Brief }) {
+  const { effectThatMatters, expectedSpread } = brief;
+  const isJudged = effectThatMatters !== null && expectedSpread !== null;
+  return (
+    <p className="key text-2 text-ink-3 flex flex-wrap gap-x-5 gap-y-1 items-center">
+      <span className="inline-flex gap-2 items-center">
+        <i />
+        {isJudged
+          ? `found from ${formatPlain(effectThatMatters)} up, at least 4 times in 5`
+          : 'can be told apart'}
+      </span>
+      {isJudged && (
+        <span className="inline-flex gap-2 items-center">
+          <i className="half" /> only if larger
+        </span>
+      )}
+      <span className="inline-flex gap-2 items-center">
+        <i className="none" /> not separable
+      </span>
+      <span>
+        Peg: one setting; its height is the third set-point. ×6: repeats. Red cross: cannot be
+        dialled in. Dashed: the ranges of the Brief.
+      </span>
+    </p>
   );
-  const requests = plans.map((plan) =>
-    designRequestSchema.parse(designRequestOf(brief, envelope, plan)),
-  );
-  const designs = useQueries({
-    queries: requests.map((request) => calculation('design', request)),
-  });
-  const evaluations = useQueries({
-    queries: designs.map(({ data }) =>
-      calculation(
-        'evaluate',
-        data
-          ? {
-              factors: factorsOf(brief, envelope),
-              constraints: constraintsOf(brief, envelope),
-              region: 'range' as const,
-              runs: data.runs.map(({ settings, block }) => ({ settings: { ...settings }, block })),
-              model: 'quadratic' as const,
-              effect: brief.effectThatMatters,
-              sigma: brief.expectedSpread,
-              significance: 0.05,
-            }
-          : null,
-      ),
-    ),
-  });
-  const picked = choices.findIndex(({ id }) => id === pickedId);
-  const pickedDesign = designs[picked]?.data ?? null;
-  const pickedPlan: PlanInput | null = plans[picked] ?? null;
+}
+
+/** The plans side by side, and below them the runs of the one that is picked. */
+export function PlanComparison({ study, brief, envelope, plans }: PlanComparisonProps) {
+  const { centrePoints, seed, picked } = plans;
   return (
     <>
-      <div className="flex flex-wrap gap-4 items-end">
-        <Field
-          label="Centre points in all"
-          value={centreText}
-          inputMode="numeric"
-          error={centrePoints === null ? 'A whole number from 0 to 30.' : undefined}
-          onChange={(event) => setCentreText(event.target.value)}
-        />
-        <Field
-          label="Seed of the random order"
-          value={seedText}
-          inputMode="numeric"
-          error={seed === null ? 'A whole number.' : undefined}
-          onChange={(event) => setSeedText(event.target.value)}
-        />
-        <p className="key text-2 text-ink-3 flex flex-wrap gap-4 items-center flex-1">
-          <span className="inline-flex gap-2 items-center">
-            <i /> found
-            {brief.effectThatMatters !== null && brief.expectedSpread !== null
-              ? ` from ${brief.effectThatMatters} up, 4 times in 5`
-              : ''}
-          </span>
-          <span className="inline-flex gap-2 items-center">
-            <i className="half" /> only if larger
-          </span>
-          <span className="inline-flex gap-2 items-center">
-            <i className="none" /> not separable
-          </span>
-          <span>Peg: one setting; ×6: repeats; red cross: cannot be dialled in.</span>
-        </p>
-      </div>
-      {brief.effectThatMatters === null || brief.expectedSpread === null ? (
+      <Question study={study} brief={brief} />
+      {(brief.effectThatMatters === null || brief.expectedSpread === null) && (
         <Notice>
-          With the smallest change that matters and the expected spread in the Brief, each plan
-          would show its chance to find it.
+          State in the Brief the smallest change that matters and the spread you expect between
+          equal runs: then each plan shows its chance to find such a change.
         </Notice>
-      ) : null}
+      )}
       <div className="grid gap-3 desk:grid-cols-2 wide:grid-cols-4">
-        {choices.map((choice, i) => (
+        {plans.plans.map(({ choice, design, evaluation, error }) => (
           <PlanCard
             key={choice.id}
             choice={choice}
             brief={brief}
             envelope={envelope}
             leftG={study.stock.leftG}
-            design={designs[i]?.data ?? null}
-            evaluation={evaluations[i]?.data ?? null}
-            refusal={refusalOf(designs[i]?.error ?? null)}
-            isPicked={choice.id === pickedId}
-            onPick={() => setPickedId(choice.id)}
+            design={design}
+            evaluation={evaluation}
+            refusal={refusalOf(error, brief, envelope)}
+            isPicked={choice.id === picked?.choice.id}
+            onPick={() => plans.pick(choice.id)}
           />
         ))}
+        <div className="plan-options">
+          <Field
+            label="Centre points in all"
+            hint="repeats at the centre: they measure the run-to-run spread"
+            value={centrePoints.text}
+            inputMode="numeric"
+            error={centrePoints.value === null ? 'A whole number from 0 to 30.' : undefined}
+            onChange={(event) => centrePoints.setText(event.target.value)}
+          />
+          <Field
+            label="Seed of the random order"
+            hint="the same seed gives the same order on every machine"
+            value={seed.text}
+            inputMode="numeric"
+            error={seed.value === null ? 'A whole number.' : undefined}
+            onChange={(event) => seed.setText(event.target.value)}
+          />
+        </div>
       </div>
-      {pickedDesign && pickedPlan && (
-        <FreezePanel
-          study={study}
-          name={choices[picked]?.name ?? ''}
-          design={pickedDesign}
-          plan={pickedPlan}
-          why={why}
-          isReady={centrePoints !== null && seed !== null}
-          onFrozen={onFrozen}
-        />
+      <Keys brief={brief} />
+      {picked?.design && (
+        <PickedRuns name={picked.choice.name} plan={picked.plan} design={picked.design} />
       )}
     </>
   );

@@ -141,6 +141,10 @@ describe('the envelope', () => {
     expect(error.code).toBe('outside-envelope');
     expect(error.message).toMatch(/voltage 210 kV.*above 200 kV/);
     expect(error.message).toMatch(/the inscribed form, the face-centred form, an optimal design/);
+    // the page draws both: what can be dialled and what cannot
+    const { points, inside } = error.details as Record<'points' | 'inside', object[]>;
+    expect(points[0]).toMatchObject({ why: expect.stringMatching(/above|below/) as string });
+    expect(points.length + inside.length).toBe(25);
     expect(
       designAnswer({ factors: rig, kind: 'centralComposite', options: { inscribed: true } }).runs,
     ).toHaveLength(30);
