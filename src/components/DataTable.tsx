@@ -7,6 +7,8 @@ export interface Column<Row> {
   /** Stands in the header, once. */
   readonly unit?: string | undefined;
   readonly numeric?: boolean;
+  /** Sentences: they wrap on a phone, where the other cells stay whole and the table scrolls. */
+  readonly isWordy?: boolean;
   readonly cell: (row: Row) => ReactNode;
 }
 
@@ -47,8 +49,11 @@ export function DataTable<Row>({
         <tbody>
           {rows.map((row) => (
             <tr key={rowKey(row)} className={rowClass?.(row) || undefined}>
-              {columns.map(({ key, numeric, cell }) => (
-                <td key={key} className={classes(numeric === true && 'num')}>
+              {columns.map(({ key, numeric, isWordy, cell }) => (
+                <td
+                  key={key}
+                  className={classes(numeric === true && 'num', isWordy === true && 'wordy')}
+                >
                   {cell(row)}
                 </td>
               ))}

@@ -17,6 +17,8 @@ export interface FieldFrame {
   readonly caution?: string | undefined;
   readonly size?: 'desk' | 'bench';
   readonly className?: string;
+  /** A small button inside the frame, behind the value. */
+  readonly aside?: ReactNode;
 }
 
 interface FrameProps extends FieldFrame {
@@ -55,7 +57,7 @@ function frameClass({ size = 'desk', error, caution, className }: FieldFrame): s
 
 /** Owns label, unit, hint and message of a control, and their ARIA links. */
 function Frame({ control, ...frame }: FrameProps) {
-  const { label, unit = '', hint, error, caution } = frame;
+  const { label, unit = '', hint, error, caution, aside } = frame;
   const id = useId();
   const hasWords = error !== undefined || caution !== undefined;
   const describedBy = classes(hasWords && `${id}-words`, hint !== undefined && `${id}-hint`);
@@ -69,6 +71,7 @@ function Frame({ control, ...frame }: FrameProps) {
           'aria-describedby': describedBy || undefined,
         })}
         {unit !== '' && <span className="in-unit">{unit}</span>}
+        {aside}
       </div>
       <Words id={`${id}-words`} error={error} caution={caution} />
       {hint !== undefined && (
@@ -94,11 +97,12 @@ export function Field({
   caution,
   size,
   className,
+  aside,
   ...input
 }: InputProps) {
   return (
     <Frame
-      {...{ label, unit, hint, error, caution }}
+      {...{ label, unit, hint, error, caution, aside }}
       {...(size ? { size } : {})}
       {...(className ? { className } : {})}
       control={(aria) => <input type="text" autoComplete="off" {...input} {...aria} />}

@@ -4,9 +4,10 @@ interface HundredSquaresProps {
   readonly error: number | null;
 }
 
-const COLUMNS = 25;
-const STEP = 9;
-const SIDE = 7;
+const COLUMNS = 20;
+const ROWS = 100 / COLUMNS;
+const STEP = 8.5;
+const SIDE = 6.5;
 
 /** One square for each imagined repeat of a hundred: filled where all goals hold, misses last. */
 export function HundredSquares({ probability, error }: HundredSquaresProps) {
@@ -15,8 +16,8 @@ export function HundredSquares({ probability, error }: HundredSquaresProps) {
   return (
     <svg
       width={COLUMNS * STEP}
-      height={4 * STEP}
-      viewBox={`0 0 ${COLUMNS * STEP} ${4 * STEP}`}
+      height={ROWS * STEP}
+      viewBox={`0 0 ${COLUMNS * STEP} ${ROWS * STEP}`}
       role="img"
       aria-label={words}
     >

@@ -37,11 +37,11 @@ export function StageLine({ stations, here, isBig = false }: StageLineProps) {
           </li>
         ))}
       </ol>
-      {now && (
-        <div className="stage-word">
-          Stage {at + 1} of {stations.length}: {now.name}
-        </div>
-      )}
+      <div className="stage-word">
+        {now
+          ? `Stage ${at + 1} of ${stations.length}: ${now.name}`
+          : `All ${stations.length} stages are done`}
+      </div>
     </nav>
   );
 }

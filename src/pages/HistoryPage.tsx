@@ -1,16 +1,21 @@
-import { useQuery } from '@tanstack/react-query';
-import { LinkButton } from '@/components/Button';
+import { useInfiniteQuery, useQuery } from '@tanstack/react-query';
+import { Button, LinkButton } from '@/components/Button';
 import { Panel } from '@/components/Panel';
 import { ErrorState, LoadingState } from '@/components/states';
 import { HistoryTable } from '@/features/studies/HistoryTable';
 import { useTitle } from '@/hooks/useTitle';
+import { runQueries } from '@/queries/runs';
 import { studyQueries } from '@/queries/studies';
 import type { StudyJson } from '@shared/schemas/study';
 import { WithStudy } from './WithStudy';
 
 function Trail({ study }: { readonly study: StudyJson }) {
   useTitle(`Trail · ${study.code}`);
-  const { data: events, error, refetch } = useQuery(studyQueries.history(study.id));
+  const trail = useInfiniteQuery(studyQueries.history(study.id));
+  const { error } = trail;
+  const events = trail.data?.pages.flat();
+  const { data: runs } = useQuery(runQueries.ofStudy(study.id));
+  const runNumbers = new Map((runs ?? []).map(({ id, number }) => [id, number]));
   return (
     <main className="page">
       <div className="flex items-center gap-4 flex-wrap">
@@ -20,12 +25,21 @@ function Trail({ study }: { readonly study: StudyJson }) {
       <p className="reading">
         Written with each change, in the same transaction; nobody can edit or delete an entry.
       </p>
-      {error && <ErrorState error={error} onRetry={() => void refetch()} />}
+      {error && <ErrorState error={error} onRetry={() => void trail.refetch()} />}
       {!events && !error && <LoadingState what="Reading the trail." />}
       {events && (
-        <Panel name="Events" fact={`${events.length}, newest first`} isFlush>
-          <HistoryTable events={events} />
+        <Panel
+          name="Events"
+          fact={`${trail.hasNextPage ? 'the newest ' : ''}${events.length}`}
+          isFlush
+        >
+          <HistoryTable events={events} runNumbers={runNumbers} />
         </Panel>
+      )}
+      {trail.hasNextPage && (
+        <Button isBusy={trail.isFetchingNextPage} onClick={() => void trail.fetchNextPage()}>
+          Show older events
+        </Button>
       )}
     </main>
   );

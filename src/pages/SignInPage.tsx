@@ -12,24 +12,29 @@ export function SignInPage() {
   const [search] = useSearchParams();
   return (
     <main className="sign-in">
-      <div className="grid content-center gap-8 p-8">
-        <Wordmark height={40} />
-        <div className="grid gap-2">
-          <h1 className="text-6">Sign in</h1>
-          <p className="reading">
-            From sample to settings for electric-pulse fragmentation: plan the runs, record the
-            bench, fit the models, sign what works.
-          </p>
-        </div>
-        <SignInForm
-          onSignedIn={() => void navigate(safeBack(search.get('back')), { replace: true })}
-        />
-        <p className="text-2 text-ink-3">
-          Accounts are made by the lab’s administrator. Cragline controls no rig.
-        </p>
-      </div>
       <div className="terrain">
         <Terrain />
+        <p className="terrain-words">Contour lines of a response, and a set-point. Made up.</p>
+      </div>
+      <div className="sign-in-side">
+        <div className="sign-in-form">
+          <Wordmark height={40} />
+          <div>
+            <h1>Sign in</h1>
+            <p className="text-ink-2">From sample to settings for electric-pulse fragmentation.</p>
+          </div>
+          <SignInForm
+            onSignedIn={() => void navigate(safeBack(search.get('back')), { replace: true })}
+          />
+          <p className="text-2 text-ink-3">
+            No account, or the password forgotten? The lab’s administrator sends a new one-time
+            address.
+          </p>
+        </div>
+        <footer className="text-1 text-ink-3">
+          Cragline plans and records; it controls no rig. The maker’s manual and the lab’s rules
+          come first.
+        </footer>
       </div>
     </main>
   );

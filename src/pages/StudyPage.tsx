@@ -1,4 +1,4 @@
-import { useQuery } from '@tanstack/react-query';
+import { useInfiniteQuery, useQuery } from '@tanstack/react-query';
 import { LedgerBar } from '@/components/LedgerBar';
 import { Panel } from '@/components/Panel';
 import { PracticeTag } from '@/components/PracticeTag';
@@ -19,7 +19,8 @@ function Home({ study }: { readonly study: StudyJson }) {
   const hasRuns = study.matrix !== null;
   const { data: runs = [] } = useQuery({ ...runQueries.ofStudy(study.id), enabled: hasRuns });
   const { data: candidates = [] } = useQuery(releaseQueries.candidates(study.id));
-  const { data: events = [] } = useQuery(studyQueries.history(study.id));
+  const { data: trail } = useInfiniteQuery(studyQueries.history(study.id));
+  const events = trail?.pages[0] ?? [];
   const { usedG, lostG, returnedG, reservedG, leftG, receivedG } = study.stock;
   return (
     <main>

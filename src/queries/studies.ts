@@ -7,7 +7,12 @@ import {
 import type { PlanInput, Purpose } from '@shared/schemas/matrix';
 import type { SettingJson } from '@shared/schemas/setPoint';
 import { auditEventJsonSchema } from '@shared/schemas/history';
-import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
+import {
+  infiniteQueryOptions,
+  queryOptions,
+  useMutation,
+  useQueryClient,
+} from '@tanstack/react-query';
 import { z } from 'zod';
 import { api } from '@/lib/api';
 
@@ -22,13 +27,22 @@ export const studyQueries = {
       queryKey: ['studies', studyId],
       queryFn: ({ signal }) => api.get(`/studies/${studyId}`, studyJsonSchema, signal),
     }),
+  /** Newest first, a hundred at a time; each page goes on before the last event of the one before. */
   history: (studyId: number) =>
-    queryOptions({
+    infiniteQueryOptions({
       queryKey: ['studies', studyId, 'history'],
-      queryFn: ({ signal }) =>
-        api.get(`/studies/${studyId}/history`, z.array(auditEventJsonSchema), signal),
+      initialPageParam: null as number | null,
+      queryFn: ({ signal, pageParam }) =>
+        api.get(
+          `/studies/${studyId}/history${pageParam === null ? '' : `?before=${pageParam}`}`,
+          z.array(auditEventJsonSchema),
+          signal,
+        ),
+      getNextPageParam: (page) => (page.length < EVENTS_A_PAGE ? null : (page.at(-1)?.id ?? null)),
     }),
 };
+
+const EVENTS_A_PAGE = 100;
 
 /** A study's page came back from a write: it is the newest, and its lists are not. */
 export function useStudyChanged() {

@@ -3,7 +3,7 @@ import { newPasswordSchema } from '@shared/schemas/text';
 import { useForm } from 'react-hook-form';
 import { z } from 'zod';
 import { Button } from '@/components/Button';
-import { Field } from '@/components/Field';
+import { PasswordField } from '@/components/PasswordField';
 import { Notice } from '@/components/Notice';
 import { showIssues } from '@/lib/formErrors';
 import { useAcceptInvitation } from '@/queries/session';
@@ -38,17 +38,15 @@ export function ChoosePasswordForm({ token, onChosen }: ChoosePasswordFormProps)
   return (
     <form onSubmit={(event) => void onSubmit(event)} className="grid gap-4" noValidate>
       <fieldset disabled={accept.isPending} className="grid gap-4">
-        <Field
+        <PasswordField
           label="Password"
-          type="password"
           autoComplete="new-password"
           hint="At least 12 characters; a sentence of your own is good."
           error={errors.password?.message}
           {...register('password')}
         />
-        <Field
+        <PasswordField
           label="Password, once more"
-          type="password"
           autoComplete="new-password"
           error={errors.again?.message}
           {...register('again')}

@@ -3,6 +3,7 @@ import { useForm } from 'react-hook-form';
 import { z } from 'zod';
 import { Button } from '@/components/Button';
 import { Field } from '@/components/Field';
+import { PasswordField } from '@/components/PasswordField';
 import { Notice } from '@/components/Notice';
 import { showIssues } from '@/lib/formErrors';
 import { useSignIn } from '@/queries/session';
@@ -37,9 +38,8 @@ export function SignInForm({ onSignedIn }: { readonly onSignedIn: () => void }) 
           error={errors.email?.message}
           {...register('email')}
         />
-        <Field
+        <PasswordField
           label="Password"
-          type="password"
           autoComplete="current-password"
           error={errors.password?.message}
           {...register('password')}

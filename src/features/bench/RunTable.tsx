@@ -59,6 +59,7 @@ export function RunTable({ studyId, brief, runs }: RunTableProps) {
     {
       key: 'state',
       header: 'State',
+      isWordy: true,
       cell: ({ status, voidReason }) =>
         voidReason === null ? STATES[status] : `void: ${voidReason}`,
     },

@@ -11,6 +11,8 @@ interface SetPointTilesProps {
   readonly massG: number;
 }
 
+const decimalsOf = (value: number) => (String(value).split('.')[1] ?? '').length;
+
 /** The four figures to dial in, and what changed since the run before. */
 export function SetPointTiles({ settings, before, envelope, massG }: SetPointTilesProps) {
   const energy = energyAnswer({
@@ -40,7 +42,7 @@ export function SetPointTiles({ settings, before, envelope, massG }: SetPointTil
               )}
             </div>
             <div className="value mono">
-              {formatPlain(now)}
+              {formatNumber(now, Math.max(decimalsOf(envelope[key].step), decimalsOf(now)))}
               {unit !== '' && <span className="unit">{unit}</span>}
             </div>
           </div>

@@ -38,7 +38,7 @@ export function BriefSummary({ brief }: { readonly brief: Brief }) {
           caption="Responses and goals"
           columns={[
             { key: 'name', header: 'Response', cell: ({ name }) => name },
-            { key: 'goal', header: 'Goal', cell: goalSentence },
+            { key: 'goal', header: 'Goal', isWordy: true, cell: goalSentence },
             {
               key: 'kind',
               header: 'How',

@@ -111,7 +111,7 @@ export function NextRuns({ study, evidence, models, picked, why, onAdded }: Next
   return (
     <Panel name="More runs" fact="in a block of their own">
       <div className="grid gap-4">
-        <div className="grid gap-3 phone:grid-cols-[2fr_1fr_2fr_auto] items-end">
+        <div className="grid gap-3 phone:grid-cols-[3fr_1fr_2fr_auto] items-end">
           <SelectField
             label="Purpose"
             value={purpose}

@@ -122,14 +122,16 @@ export function ReleaseBoard(props: ReleaseBoardProps) {
         </div>
       </div>
       <div className="grid gap-4 desk:grid-cols-2 items-start">
-        <NextRuns
-          study={study}
-          evidence={evidence}
-          models={models}
-          picked={picked}
-          why={whyNot.addRuns}
-          onAdded={onAdded}
-        />
+        {study.progress.releasedAt === null && (
+          <NextRuns
+            study={study}
+            evidence={evidence}
+            models={models}
+            picked={picked}
+            why={whyNot.addRuns}
+            onAdded={onAdded}
+          />
+        )}
         {whyNot.sign !== null ? (
           <Notice>{whyNot.sign}</Notice>
         ) : picked === null ? (

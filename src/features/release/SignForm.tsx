@@ -7,6 +7,7 @@ import { useForm } from 'react-hook-form';
 import type { z } from 'zod';
 import { Button } from '@/components/Button';
 import { Field } from '@/components/Field';
+import { PasswordField } from '@/components/PasswordField';
 import { Notice } from '@/components/Notice';
 import { Panel } from '@/components/Panel';
 import { newKey } from '@/lib/api';
@@ -67,9 +68,8 @@ export function SignForm({ study, setting, onSigned }: SignFormProps) {
             error={errors.validUntil?.message}
             {...register('validUntil', { setValueAs: (value: string) => value || null })}
           />
-          <Field
+          <PasswordField
             label="Your password, to sign"
-            type="password"
             autoComplete="current-password"
             error={errors.password?.message}
             {...register('password')}

@@ -57,7 +57,7 @@ export function SignedRelease({ release }: { readonly release: ReleaseJson }) {
           caption="What the settings promise"
           columns={[
             { key: 'name', header: 'Response', cell: ({ name }) => name },
-            { key: 'goal', header: 'Goal', cell: ({ goal }) => goal },
+            { key: 'goal', header: 'Goal', isWordy: true, cell: ({ goal }) => goal },
             {
               key: 'predicted',
               header: 'Expected',

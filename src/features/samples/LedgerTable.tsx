@@ -19,7 +19,7 @@ const columns: readonly Column<Entry>[] = [
   { key: 'kind', header: 'What', cell: ({ kind }) => KINDS[kind] },
   { key: 'mass', header: 'Mass', numeric: true, cell: ({ massG }) => formatMass(massG) },
   { key: 'by', header: 'By', cell: ({ by }) => by.name },
-  { key: 'note', header: 'Note', cell: ({ note }) => note || '—' },
+  { key: 'note', header: 'Note', isWordy: true, cell: ({ note }) => note || '—' },
 ];
 
 export function LedgerTable({ entries }: { readonly entries: readonly Entry[] }) {

@@ -18,7 +18,7 @@ const columns: readonly Column<SampleJson>[] = [
       </>
     ),
   },
-  { key: 'material', header: 'Material', cell: ({ material }) => material },
+  { key: 'material', header: 'Material', isWordy: true, cell: ({ material }) => material },
   { key: 'customer', header: 'From', cell: ({ customer }) => customer?.name ?? '—' },
   { key: 'received', header: 'Received', cell: ({ receivedOn }) => formatDay(receivedOn) },
   {

@@ -10,6 +10,7 @@ const columns: readonly Column<StudySummaryJson>[] = [
   {
     key: 'title',
     header: 'Question',
+    isWordy: true,
     cell: ({ id, title, isSimulated }) => (
       <>
         <Link className="link text-3 font-mark" to={`/studies/${id}`}>
