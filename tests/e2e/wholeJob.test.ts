@@ -21,7 +21,10 @@ afterAll(async () => {
 });
 
 async function openAs(role: string): Promise<Page> {
-  const context = await browser.newContext({ viewport: { width: 1280, height: 900 } });
+  const context = await browser.newContext({
+    viewport: { width: 1280, height: 900 },
+    reducedMotion: 'reduce',
+  });
   const page = await context.newPage();
   page.setDefaultTimeout(20_000);
   errors = collectErrors(page);
@@ -106,7 +109,7 @@ describe('from sample to signed settings', () => {
     // the rotatable one reaches beyond what this rig can dial: refused with its points
     await page
       .getByRole('article', { name: 'Central composite, rotatable' })
-      .getByText(/runs cannot be dialled in|Bench time/)
+      .getByText(/settings cannot be dialled in/)
       .first()
       .waitFor();
     await page.getByRole('button', { name: 'Pick Central composite, face-centred' }).click();

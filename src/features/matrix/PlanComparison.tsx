@@ -25,23 +25,25 @@ function Question({ study, brief }: { readonly study: StudyJson; readonly brief:
   const figure = (value: number | null) =>
     value === null ? 'not stated' : `${formatPlain(value)} ${unit}`;
   return (
-    <dl className="ask">
-      <div>
-        <dt>Question</dt>
-        <dd>{study.question || 'not written down'}</dd>
-      </div>
-      <div>
-        <dt>Effect that matters</dt>
-        <dd>{figure(brief.effectThatMatters)}</dd>
-      </div>
-      <div>
-        <dt>Run-to-run spread</dt>
-        <dd>{figure(brief.expectedSpread)}</dd>
-      </div>
+    <div className="flex flex-wrap gap-x-8 gap-y-1 items-baseline">
+      <dl className="ask">
+        <div>
+          <dt>Question</dt>
+          <dd>{study.question || 'not written down'}</dd>
+        </div>
+        <div>
+          <dt>Effect that matters</dt>
+          <dd>{figure(brief.effectThatMatters)}</dd>
+        </div>
+        <div>
+          <dt>Run-to-run spread</dt>
+          <dd>{figure(brief.expectedSpread)}</dd>
+        </div>
+      </dl>
       <Link className="link text-2" to={`/studies/${study.id}/brief`}>
         Change the Brief
       </Link>
-    </dl>
+    </div>
   );
 }
 
