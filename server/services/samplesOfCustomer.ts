@@ -1,5 +1,5 @@
 import type { customerSampleSchema } from '@shared/schemas/sample';
-import { STAGES, type Stage } from '@shared/schemas/study';
+import type { Stage } from '@shared/schemas/stage';
 import type { z } from 'zod';
 import type { Context } from '../context';
 import { Sample } from '../models/Sample';
@@ -47,7 +47,7 @@ export async function samplesOfCustomer(
         code: study.code,
         title: study.title,
         stage: progress.stage,
-        stageNumber: STAGES.indexOf(progress.stage) + 1,
+        isSigned: progress.releasedAt !== null,
         words: progress.releasedAt ? 'The settings are signed.' : WORDS[progress.stage],
       })),
   }));

@@ -1,4 +1,4 @@
-import type { Stage } from '../schemas/study';
+import type { Stage } from '../schemas/stage';
 import { has, onlyFor, type Rule } from './actor';
 
 export interface StudyFacts {

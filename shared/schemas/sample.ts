@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { byLineSchema, idSchema, momentSchema, versionSchema } from './identity';
+import { stageSchema } from './stage';
 import { lineSchema, reasonSchema, textSchema } from './text';
 
 /**
@@ -201,9 +202,10 @@ export const customerSampleSchema = z.object({
     z.object({
       code: z.string(),
       title: z.string(),
-      stage: z.string(),
-      stageNumber: z.number(),
+      stage: stageSchema,
+      isSigned: z.boolean(),
       words: z.string(),
     }),
   ),
 });
+export type CustomerSampleJson = z.infer<typeof customerSampleSchema>;

@@ -3,12 +3,9 @@ import { byLineSchema, idSchema, momentSchema, versionSchema } from './identity'
 import { responseInputSchema } from './response';
 import { rigJsonSchema } from './rig';
 import { SET_POINT_KEYS, setPointKeySchema } from './setPoint';
+import { stageSchema } from './stage';
 import { stockSchema } from './sample';
 import { lineSchema, textSchema } from './text';
-
-export const STAGES = ['brief', 'matrix', 'bench', 'fit', 'map', 'release'] as const;
-export const stageSchema = z.enum(STAGES);
-export type Stage = z.infer<typeof stageSchema>;
 
 export const studyFactorSchema = z
   .strictObject({

@@ -1,4 +1,4 @@
-import type { Stage } from '../schemas/study';
+import type { Stage } from '../schemas/stage';
 
 /** The counts from which a study's stage follows. */
 export interface StageFacts {

@@ -5,7 +5,8 @@ export interface Station {
   readonly key: string;
   readonly name: string;
   readonly fact?: string;
-  readonly to: string;
+  /** Where it leads; a station without a page is not a link. */
+  readonly to?: string;
   readonly state: 'done' | 'half' | 'now' | 'next';
 }
 
@@ -20,8 +21,10 @@ interface StageLineProps {
 export function StageLine({ stations, here, isBig = false }: StageLineProps) {
   const at = stations.findIndex(({ state }) => state === 'now');
   const now = stations[at];
+  const isNavigation = stations.some(({ to }) => to !== undefined);
+  const Frame = isNavigation ? 'nav' : 'div';
   return (
-    <nav aria-label="Stages of this study">
+    <Frame {...(isNavigation ? {} : { role: 'group' })} aria-label="Stages of this study">
       <ol className={classes('stages', isBig && 'big')}>
         {stations.map(({ key, name, fact, to, state }) => (
           <li
@@ -30,9 +33,13 @@ export function StageLine({ stations, here, isBig = false }: StageLineProps) {
             aria-current={state === 'now' ? 'step' : undefined}
           >
             <i />
-            <Link to={to} aria-current={key === here ? 'page' : undefined}>
-              {name}
-            </Link>
+            {to === undefined ? (
+              name
+            ) : (
+              <Link to={to} aria-current={key === here ? 'page' : undefined}>
+                {name}
+              </Link>
+            )}
             {fact !== undefined && <small>{fact}</small>}
           </li>
         ))}
@@ -42,6 +49,6 @@ export function StageLine({ stations, here, isBig = false }: StageLineProps) {
           ? `Stage ${at + 1} of ${stations.length}: ${now.name}`
           : `All ${stations.length} stages are done`}
       </div>
-    </nav>
+    </Frame>
   );
 }

@@ -1,4 +1,5 @@
-import type { Stage, StudyJson } from '@shared/schemas/study';
+import type { StudyJson } from '@shared/schemas/study';
+import type { Stage } from '@shared/schemas/stage';
 import type { ReactNode } from 'react';
 import { PracticeTag } from '@/components/PracticeTag';
 import { StageLine } from '@/components/StageLine';

@@ -1,4 +1,5 @@
-import { STAGES, type Stage, type StudySummaryJson } from '@shared/schemas/study';
+import type { StudySummaryJson } from '@shared/schemas/study';
+import { STAGES, type Stage } from '@shared/schemas/stage';
 import type { Station } from '@/components/StageLine';
 
 export const STAGE_NAMES: Readonly<Record<Stage, string>> = {
